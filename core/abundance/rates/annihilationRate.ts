@@ -1,0 +1,24 @@
+import { GEV_MINUS2_PER_CM3_S } from '../../constants/natural.ts'
+import type { AnnihilationInput } from '../../wire/candidate.ts'
+
+/** ⟨σv⟩ in GeV⁻² as a function of x = m/T. */
+export type AnnihilationRate = (x: number) => number
+
+/**
+ * The thermally averaged annihilation cross-section of an input.
+ * partial waves: σv = a + b v² gives ⟨σv⟩ = a + 6b/x to leading order (Gondolo & Gelmini, Nucl. Phys. B 360 (1991) 145).
+ * power law: ⟨σv⟩ = σ₀ x^{−n} (Kolb & Turner, The Early Universe (1990), §5.2).
+ */
+export function annihilationRate(annihilation: AnnihilationInput): AnnihilationRate {
+  switch (annihilation.kind) {
+    case 'partial-waves': {
+      const a = annihilation.sWaveCm3PerS * GEV_MINUS2_PER_CM3_S
+      const b = 6 * annihilation.pWaveCm3PerS * GEV_MINUS2_PER_CM3_S
+      return (x) => a + b / x
+    }
+    case 'power-law': {
+      const coefficient = annihilation.coefficientCm3PerS * GEV_MINUS2_PER_CM3_S
+      return (x) => coefficient * x ** -annihilation.exponent
+    }
+  }
+}

@@ -1,0 +1,21 @@
+/** What a treatment says about the bath at one temperature; effective numbers in the photons' temperature. */
+export interface BathPoint {
+  /** g_ρ = ρ/(π²T⁴/30). */
+  gRho: number
+  /** g_s = s/(2π²T³/45). */
+  gS: number
+  /** dg_s/d ln T. */
+  gSSlope: number
+  /** p/(π²T⁴/90); NaN where the treatment leaves the pressure undefined. */
+  gP: number
+}
+
+/** A part of the bath, or the whole, as a function of temperature. */
+export interface BathPart {
+  /** Temperatures, GeV, where a value or one of its first derivatives jumps. */
+  readonly breaks: readonly number[]
+  /** Writes the part at temperature T, GeV, into `out`. At a step the cold side is taken. */
+  evaluate(temperatureGeV: number, out: BathPoint): void
+}
+
+export const emptyPoint = (): BathPoint => ({ gRho: 0, gS: 0, gSSlope: 0, gP: 0 })

@@ -1,0 +1,20 @@
+/** Exact ideal-gas integrals for every species; free quarks and gluons above T_c, a gas of hadrons at and below it. */
+import type { BathPart } from '../bath.ts'
+import { gasJet, pointOfJet } from '../gas.ts'
+import { WITHOUT_COLOUR, WITH_COLOUR } from '../particles/standardModel.ts'
+import type { Particle } from '../particles/species.ts'
+
+export function idealSwitch(
+  transitionTemperatureGeV: number,
+  hadrons: readonly Particle[],
+  others: readonly Particle[],
+): BathPart {
+  const above = [...WITHOUT_COLOUR, ...WITH_COLOUR, ...others]
+  const below = [...WITHOUT_COLOUR, ...hadrons, ...others]
+  return {
+    breaks: [transitionTemperatureGeV],
+    evaluate(temperatureGeV, out) {
+      pointOfJet(gasJet(temperatureGeV > transitionTemperatureGeV ? above : below, temperatureGeV), out)
+    },
+  }
+}

@@ -1,0 +1,80 @@
+/** The derived history as rows over temperature, each number from the exact treatment rather than its table. */
+import { emptyPoint } from '../bath/bath.ts'
+import { HBARC_GEV_CM, HBAR_GEV_S, SOLAR_MASS_GEV } from '../constants/natural.ts'
+import type { HistoryRow } from '../wire/compute.ts'
+import { LATE_GEV, lateUniverse } from './lateUniverse.ts'
+import { ages } from './time.ts'
+import { ENERGY_FACTOR, ENTROPY_FACTOR, emptyExpansion, hubbleOf } from './thermalHistory.ts'
+import type { ExpansionPoint, ThermalHistory } from './thermalHistory.ts'
+
+/** Entropy density today, cm⁻³. */
+export const entropyTodayPerCm3 = (history: ThermalHistory): number =>
+  history.entropyToday / HBARC_GEV_CM ** 3
+
+/** Why some pressures are null, in words; undefined when the treatment defines them everywhere. */
+export function pressureUndefinedBecause(history: ThermalHistory): string | undefined {
+  if (history.input.bath.treatment !== 'fit-2018') return undefined
+  return 'below 10^0.5 MeV the 2018 fit gives ρ and s only, and p = Ts − ρ does not hold once neutrinos have their own temperature'
+}
+
+/** a/a₀ = (s₀/s)^{1/3}, and above a sudden entropy release of factor D (s₀/(D s))^{1/3}. */
+export function scaleFactor(history: ThermalHistory, temperatureGeV: number, entropy: number): number {
+  const step = history.entropyStep
+  const released = step && temperatureGeV > step.temperature ? step.factor : 1
+  return Math.cbrt(history.entropyToday / (released * entropy))
+}
+
+/** One row for each temperature, GeV, in the order given. */
+export function historyRows(history: ThermalHistory, temperaturesGeV: readonly number[]): HistoryRow[] {
+  const times = ages(history, temperaturesGeV)
+  const late = lateUniverse(history)
+  const { bath, apart } = history.radiation
+  const point = emptyPoint()
+  const other = { gRho: 0, gP: 0 }
+  const hasSpeciesApart = history.input.extraSpecies.some((species) => species.coupling.kind !== 'bath')
+  const neutrinosDecouple = history.input.neutrinos.decouplingTemperatureGeV
+
+  return temperaturesGeV.map((temperature, i) => {
+    bath.evaluate(temperature, point)
+    apart.evaluate(temperature, point.gS, other)
+    const gRho = point.gRho + other.gRho
+    const logSlope = point.gSSlope / point.gS
+    const entropy = ENTROPY_FACTOR * point.gS * temperature ** 3
+    const fluid = history.fluid?.energy(temperature, point.gS) ?? 0
+    const state: ExpansionPoint = {
+      ...emptyExpansion(),
+      temperature,
+      entropy,
+      energy: ENERGY_FACTOR * gRho * temperature ** 4 + fluid,
+    }
+    const matter = late.matter(state)
+    const darkEnergy = late.darkEnergy(state)
+    const energy = state.energy + matter + darkEnergy
+    const hubble = hubbleOf(energy)
+    const fluidPressure = ((1 + (history.fluid?.index ?? 0)) / 3) * fluid
+    const pressure =
+      (Math.PI ** 2 / 90) * (point.gP + other.gP) * temperature ** 4 + fluidPressure - darkEnergy
+    const defined = Number.isFinite(pressure)
+    const oneTemperature =
+      defined && !history.fluid && !hasSpeciesApart && temperature > Math.max(neutrinosDecouple, LATE_GEV)
+    const a = scaleFactor(history, temperature, entropy)
+    return {
+      temperatureGeV: temperature,
+      gRho,
+      gS: point.gS,
+      gStarHalf: (point.gS / Math.sqrt(gRho)) * (1 + logSlope / 3),
+      dLnGsDLnT: logSlope,
+      energyDensityGeV4: energy,
+      pressureGeV4: defined ? pressure : null,
+      entropyDensityGeV3: entropy,
+      hubbleGeV: hubble,
+      timeS: times[i]!,
+      scaleFactor: a,
+      equationOfState: defined ? pressure / energy : null,
+      soundSpeedSquared: oneTemperature ? 1 / (3 + logSlope) : null,
+      waveFrequencyHz: (a * hubble) / (2 * Math.PI) / HBAR_GEV_S,
+      horizonMassSolar: ((4 * Math.PI) / 3) * (energy / hubble ** 3 / SOLAR_MASS_GEV),
+      ...(temperature < LATE_GEV ? { matterDensityGeV4: matter, darkEnergyDensityGeV4: darkEnergy } : {}),
+    }
+  })
+}

@@ -1,0 +1,91 @@
+import { z } from 'zod'
+import { candidateInput } from './candidate.ts'
+import { historyInput } from './history.ts'
+import { temperatureGeV } from './numbers.ts'
+
+/** Input of `abundance`: one history and one candidate. */
+export const abundanceRequest = z
+  .strictObject({ history: historyInput, candidate: candidateInput })
+  .meta({ id: 'AbundanceRequest' })
+export type AbundanceRequest = z.output<typeof abundanceRequest>
+
+/** A physics warning with the number it rests on. It warns; it never refuses. */
+export const guard = z
+  .object({
+    code: z.string(),
+    message: z.string(),
+    value: z.number().describe('The number found'),
+    limit: z.number().describe('The number it is held against'),
+    unit: z.string().describe('Unit of value and limit; empty when they are pure numbers'),
+    source: z.string(),
+  })
+  .meta({ id: 'Guard' })
+export type Guard = z.output<typeof guard>
+
+export const abundanceResult = z
+  .object({
+    omegaH2: z.number().describe('Ω_χ h²'),
+    yieldToday: z.number().describe('Y = n/s today'),
+    numericalError: z
+      .number()
+      .describe('Estimated relative error of omegaH2 from the numerical method alone'),
+    freezeOutX: z.number().optional().describe('x_f, where Y = 2.5 Y_eq'),
+    freezeOutTemperatureGeV: z.number().optional(),
+    sigmaVAtFreezeOutCm3PerS: z.number().optional(),
+    rateOverHubbleAtFreezeOut: z.number().optional().describe('n_eq⟨σv⟩/H at x_f'),
+    rateEqualsHubbleTemperatureGeV: z
+      .number()
+      .optional()
+      .describe('T where n_eq⟨σv⟩ = H, the last time, GeV'),
+    yieldFreezeIn: z.number().optional(),
+    lifetimeS: z.number().optional(),
+    widthGeV: z.number().optional(),
+    productionTemperatureGeV: z.number().optional().describe('T where dY/dln T is largest, GeV'),
+    guards: z.array(guard),
+  })
+  .meta({ id: 'AbundanceResult' })
+export type AbundanceResult = z.output<typeof abundanceResult>
+
+/** Input of `history`: rows are answered in the order of the temperatures. */
+export const historyRequest = z
+  .strictObject({
+    history: historyInput,
+    temperaturesGeV: z.array(temperatureGeV).min(1).max(20_000),
+  })
+  .meta({ id: 'HistoryRequest' })
+export type HistoryRequest = z.output<typeof historyRequest>
+
+const undefinedHere = z.number().nullable()
+
+/** One row of a derived history; null where the treatment leaves the quantity undefined. */
+export const historyRow = z
+  .object({
+    temperatureGeV: z.number(),
+    gRho: z.number().describe('Effective number of all radiation in energy density, extra species included'),
+    gS: z.number().describe('Effective number in entropy density'),
+    gStarHalf: z.number().describe('g_*^(1/2) = (g_s/√g_ρ)(1 + δ_s)'),
+    dLnGsDLnT: z.number(),
+    energyDensityGeV4: z.number().describe('Of everything: fluid, matter and Λ included'),
+    pressureGeV4: undefinedHere,
+    entropyDensityGeV3: z.number(),
+    hubbleGeV: z.number(),
+    timeS: z.number(),
+    scaleFactor: z.number().describe('a/a₀'),
+    equationOfState: undefinedHere.describe('w = p/ρ'),
+    soundSpeedSquared: undefinedHere.describe('dp/dρ at fixed composition'),
+    waveFrequencyHz: z.number().describe('Present-day frequency of a wave entering the horizon, Hz'),
+    horizonMassSolar: z.number().describe('Mass inside the Hubble radius, solar masses'),
+    matterDensityGeV4: z.number().optional(),
+    darkEnergyDensityGeV4: z.number().optional(),
+  })
+  .meta({ id: 'HistoryRow' })
+export type HistoryRow = z.output<typeof historyRow>
+
+export const historyResult = z
+  .object({
+    rows: z.array(historyRow),
+    entropyTodayPerCm3: z.number(),
+    pressureUndefinedBecause: z.string().optional(),
+  })
+  .meta({ id: 'HistoryResult' })
+export type HistoryResult = z.output<typeof historyResult>

@@ -1,0 +1,35 @@
+import { drizzle } from 'drizzle-orm/node-postgres'
+import { migrate as applyMigrations } from 'drizzle-orm/node-postgres/migrator'
+import pg from 'pg'
+
+/** Any number will do, as long as every Emberline migrator takes the same one. */
+const MIGRATION_LOCK = 7_236_001
+
+/**
+ * Brings the database at `url` to the newest schema; `url` signs in as its owner.
+ * Several may be started at once: each waits for the one before, then finds nothing left to do.
+ */
+export async function migrate(url: string): Promise<void> {
+  const client = new pg.Client({ connectionString: url })
+  await client.connect()
+  try {
+    await client.query('select pg_advisory_lock($1)', [MIGRATION_LOCK])
+    await applyMigrations(drizzle(client), {
+      migrationsFolder: process.env['EMBERLINE_MIGRATIONS_DIR'] ?? 'db/migrations',
+    })
+  } finally {
+    await client.end()
+  }
+}
+
+/** Whether this file, or the bundle of the same name, is the program node was asked to run. */
+const startedAsProgram = /[\\/]migrate\.[jt]s$/.test(process.argv[1] ?? '')
+
+if (startedAsProgram) {
+  const url = process.env['EMBERLINE_MIGRATION_URL']
+  if (url === undefined || url === '') {
+    console.error('EMBERLINE_MIGRATION_URL is not set: give the address of the database, signing in as its owner')
+    process.exit(2)
+  }
+  await migrate(url)
+}

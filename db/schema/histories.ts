@@ -1,0 +1,3 @@
+import { recordTable } from './recordTable.ts'
+
+export const histories = recordTable('histories')
