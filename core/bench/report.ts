@@ -97,7 +97,7 @@ function markOf(result: AbundanceResult): BenchReport['mark'] {
 function timesOf(history: ThermalHistory, { hotGeV, coldGeV }: BenchRequest['window']): BenchReport['times'] {
   const temperatures: number[] = []
   for (let decade = Math.floor(Math.log10(hotGeV)); decade >= Math.ceil(Math.log10(coldGeV)); decade--)
-    temperatures.push(10 ** decade)
+    temperatures.push(Number(`1e${decade}`))
   return ages(history, temperatures).map((timeS, i) => ({ temperatureGeV: temperatures[i]!, timeS }))
 }
 

@@ -55,7 +55,7 @@ export const NEWTON_CONSTANT: Constant = {
 export const MEGAPARSEC: Constant = {
   symbol: 'Mpc',
   name: 'megaparsec, from the parsec of IAU 2015 resolution B2',
-  value: 3.0856775814913673e22,
+  value: 3.085677581491367e22,
   unit: 'm',
   uncertainty: 0,
   source: 'IAU 2015 resolution B2',

@@ -1,4 +1,5 @@
 import type { z } from 'zod'
+import { faultWords } from './faultWords.ts'
 
 /** One thing wrong with an input: where, what stands there, what would do. */
 export interface Fault {
@@ -59,7 +60,10 @@ export function faultsOf(error: z.ZodError, input: unknown): Fault[] {
         message: 'not a name known here; remove it or correct its spelling',
       }))
     }
-    const fault: Fault = { path: pathText(issue.path), message: issue.message }
+    const fault: Fault = {
+      path: pathText(issue.path),
+      message: faultWords(issue, valueAt(input, issue.path) === undefined),
+    }
     const value = shownValue(input, issue.path)
     return [value === undefined ? fault : { ...fault, value }]
   })
