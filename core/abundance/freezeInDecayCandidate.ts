@@ -58,7 +58,7 @@ export function freezeInDecayAbundance(
     DECAY_RULES.length,
     (i) => solveFreezeInDecay(history, source, DECAY_RULES[i]!),
     (found) => found,
-    history.tableError,
+    () => history.tableError,
   )
   const peak = productionPeak(history, source)
   const point = emptyExpansion()

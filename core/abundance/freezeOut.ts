@@ -23,15 +23,28 @@ export interface FreezeOutStart {
 /** Numerical effort: the tolerance of a step in ln Y and the quadrature afterwards. */
 export interface Effort {
   tolerance: number
+  /** The rule while annihilation still matters. */
   rule: QuadratureRule
 }
 
+/** Rules for panels that add less than 1e-3, and less than 1e-7, to 1/Y. */
+const MINOR_RULE = gaussLegendre(6)
+const SLIGHT_RULE = gaussLegendre(3)
+
+function panelRule(effort: Effort, share: number): QuadratureRule {
+  if (share > 1e-3) return effort.rule
+  return share > 1e-7 ? MINOR_RULE : SLIGHT_RULE
+}
+
+/** Share of 1/Y per e-fold below which the rest of the way, were it a thousand times as much, would not be seen. */
+const NOTHING_MORE = 1e-15
+
 /** Efforts of rising care. Two neighbours that agree vouch for each other; see `checked.ts`. */
 export const EFFORTS: readonly Effort[] = [
-  { tolerance: 1e-4, rule: gaussLegendre(8) },
-  { tolerance: 1e-6, rule: gaussLegendre(10) },
-  { tolerance: 1e-8, rule: gaussLegendre(12) },
-  { tolerance: 1e-10, rule: gaussLegendre(16) },
+  { tolerance: 1e-4, rule: gaussLegendre(6) },
+  { tolerance: 1e-5, rule: gaussLegendre(8) },
+  { tolerance: 1e-7, rule: gaussLegendre(12) },
+  { tolerance: 1e-9, rule: gaussLegendre(16) },
 ]
 
 /** Wanted values of ln x, ascending, and the ln Y found there. */
@@ -255,8 +268,10 @@ function afterProduction(run: FreezeOutRun, lnXToday: number): void {
     const [from, to] = [edges[i]!, edges[i + 1]!]
     state.stayBelow(state.lnMass - from)
     const start = inverse
-    run.sample(to, (lnX) => -Math.log(start + integrateWith(effort.rule, strengthAt, from, lnX)))
-    inverse += integrateWith(effort.rule, strengthAt, from, to)
+    const share = strengthAt(from) / inverse
+    const rule = panelRule(effort, share)
+    run.sample(to, (lnX) => -Math.log(start + integrateWith(rule, strengthAt, from, lnX)))
+    inverse += share < NOTHING_MORE ? 0 : integrateWith(rule, strengthAt, from, to)
     inverse *= Math.exp(dilutionAt(run, state.lnMass - to))
   }
   run.lnX = lnXToday

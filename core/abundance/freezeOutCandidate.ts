@@ -106,6 +106,9 @@ function guardsOf(
   ]
 }
 
+/** Global error of the order-9 solution over the tolerance of its order-5 estimate; at most this in all reference cases. */
+const LEFT_OF_TOLERANCE = 5e-4
+
 /** @throws ConvergenceError, InputError */
 export function freezeOutAbundance(history: ThermalHistory, candidate: FreezeOutInput): AbundanceResult {
   const state = annihilatingState(history, candidate)
@@ -114,7 +117,7 @@ export function freezeOutAbundance(history: ThermalHistory, candidate: FreezeOut
     EFFORTS.length,
     (i) => solveFreezeOut(state, start, EFFORTS[i]!),
     (solution) => solution.yieldToday,
-    history.tableError,
+    (i) => history.tableError + LEFT_OF_TOLERANCE * EFFORTS[i]!.tolerance,
   )
   return {
     omegaH2: relicDensity(history, candidate.massGeV, value.yieldToday),

@@ -2,7 +2,7 @@
  * The integrals of one species tabulated over ln x, for the sums over dozens of species that a bath needs.
  * Interpolation error 1e-13 relative to each scaled function; built once for each statistics, when first wanted.
  */
-import { evaluate, tabulate } from '../numerics/interpolation/chebyshev.ts'
+import { evaluate, evaluateColumn, tabulate } from '../numerics/interpolation/chebyshev.ts'
 import type { ChebyshevTable } from '../numerics/interpolation/chebyshev.ts'
 import { MASSLESS, scaledIntegrals } from './speciesIntegrals.ts'
 import type { Statistics } from './speciesIntegrals.ts'
@@ -11,7 +11,7 @@ import type { Statistics } from './speciesIntegrals.ts'
 const LEAST_X = 1e-5
 const LARGEST_X = 1000
 
-/** Columns of the table: logarithms of the integrals times e^x, so that the error is relative. */
+/** Columns of the table: the integrals times e^x. */
 const NUMBER = 0
 const PRESSURE = 1
 const I1 = 2
@@ -27,15 +27,15 @@ function tableOf(statistics: Statistics): ChebyshevTable {
   const table = tabulate(
     (lnX, out) => {
       const scaled = scaledIntegrals(Math.exp(lnX), statistics)
-      out[NUMBER] = Math.log(scaled.number)
-      out[PRESSURE] = Math.log(scaled.pressure)
-      out[I1] = Math.log(scaled.i1)
-      out[I0] = Math.log(scaled.i0)
+      out[NUMBER] = scaled.number
+      out[PRESSURE] = scaled.pressure
+      out[I1] = scaled.i1
+      out[I0] = scaled.i0
     },
     COLUMNS,
     Math.log(LEAST_X),
     Math.log(LARGEST_X),
-    { tolerance: 1e-14, maximumDepth: 7 },
+    { tolerance: 1e-14, maximumDepth: 7, floor: 0 },
   )
   tables.set(statistics, table)
   return table
@@ -78,10 +78,11 @@ export function addSpeciesAt(
   }
   evaluate(tableOf(statistics), Math.log(x), columns)
   const x2 = x * x
-  const i1 = x2 * Math.exp(columns[I1]! - x)
-  jet.value += degreesOfFreedom * Math.exp(columns[PRESSURE]! - x)
-  jet.first += degreesOfFreedom * i1
-  jet.second += degreesOfFreedom * (x2 * x2 * Math.exp(columns[I0]! - x) - 2 * i1)
+  const weight = degreesOfFreedom * Math.exp(-x)
+  const i1 = x2 * columns[I1]!
+  jet.value += weight * columns[PRESSURE]!
+  jet.first += weight * i1
+  jet.second += weight * (x2 * x2 * columns[I0]! - 2 * i1)
 }
 
 /** ln(n/T³) of one internal state at x = m/T; Maxwell–Boltzmann's asymptotic form takes over above x = 1000. */
@@ -92,14 +93,12 @@ export function logNumberDensity(x: number, statistics: Statistics): number {
     const series = 1 + inverse * (15 / 8 + inverse * (105 / 128 - inverse * (315 / 1024)))
     return -x + 1.5 * Math.log(x / (2 * Math.PI)) + Math.log(series)
   }
-  evaluate(tableOf(statistics), Math.log(x), columns)
-  return columns[NUMBER]! - x
+  return Math.log(evaluateColumn(tableOf(statistics), NUMBER, Math.log(x))) - x
 }
 
 /** Σ_k (−η)^{k+1} K₁(kx)/k = 2π² I₁/x, the source of freeze-in by decay; g = 1. */
 export function decaySum(x: number, statistics: Statistics): number {
   if (x < LEAST_X) return (2 * Math.PI ** 2 * MASSLESS[statistics].i1) / x
   if (x > LARGEST_X) return 0
-  evaluate(tableOf(statistics), Math.log(x), columns)
-  return (2 * Math.PI ** 2 * Math.exp(columns[I1]! - x)) / x
+  return (2 * Math.PI ** 2 * evaluateColumn(tableOf(statistics), I1, Math.log(x)) * Math.exp(-x)) / x
 }

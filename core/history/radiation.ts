@@ -14,8 +14,8 @@ export const COLDEST_GEV = 1e-14
 export const HOTTEST_GEV = 1e16
 
 /** Columns of the table. */
-export const LN_G_RHO = 0
-export const LN_G_S = 1
+export const G_RHO = 0
+export const G_S = 1
 export const LOG_SLOPE = 2
 
 export interface Radiation {
@@ -23,7 +23,7 @@ export interface Radiation {
   readonly apart: SpeciesApart
   /** Temperatures, GeV, ascending, where a value or a first derivative jumps. */
   readonly breaks: readonly number[]
-  /** ln g_ρ of all radiation, ln g_s of the bath, d ln g_s/d ln T, against ln(T/GeV). */
+  /** g_ρ of all radiation, g_s of the bath, d ln g_s/d ln T, against ln(T/GeV). */
   readonly table: ChebyshevTable
 }
 
@@ -41,8 +41,8 @@ function buildRadiation({ bath: treatment, neutrinos, extraSpecies }: RadiationI
       const temperature = Math.exp(lnT)
       bath.evaluate(temperature, point)
       apart.evaluate(temperature, point.gS, other)
-      out[LN_G_RHO] = Math.log(point.gRho + other.gRho)
-      out[LN_G_S] = Math.log(point.gS)
+      out[G_RHO] = point.gRho + other.gRho
+      out[G_S] = point.gS
       out[LOG_SLOPE] = point.gSSlope / point.gS
     },
     3,

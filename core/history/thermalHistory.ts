@@ -11,7 +11,7 @@ import { evaluate } from '../numerics/interpolation/chebyshev.ts'
 import type { HistoryInput } from '../wire/history.ts'
 import { fluidDensity } from './fluid.ts'
 import type { FluidDensity } from './fluid.ts'
-import { LN_G_RHO, LN_G_S, LOG_SLOPE, radiationOf } from './radiation.ts'
+import { G_RHO, G_S, LOG_SLOPE, radiationOf } from './radiation.ts'
 import type { Radiation } from './radiation.ts'
 
 /** s/(g_s T³). */
@@ -75,8 +75,8 @@ export function buildHistory(input: HistoryInput): ThermalHistory {
     const temperature = Math.exp(lnT)
     evaluate(table, lnT, columns)
     out.temperature = temperature
-    out.gRho = Math.exp(columns[LN_G_RHO]!)
-    out.gS = Math.exp(columns[LN_G_S]!)
+    out.gRho = columns[G_RHO]!
+    out.gS = columns[G_S]!
     out.delta = columns[LOG_SLOPE]! / 3
     const cubed = temperature * temperature * temperature
     out.entropy = ENTROPY_FACTOR * out.gS * cubed

@@ -23,10 +23,12 @@ export interface ChebyshevTable {
 export interface ChebyshevOptions {
   /** Where a function or one of its derivatives jumps; those outside the range are left out. */
   breaks?: readonly number[]
-  /** Wanted error relative to the larger of 1 and the size of the function on the piece. */
+  /** Wanted error relative to the size of the function on the piece, or to `floor` where that is larger. */
   tolerance?: number
   /** Halvings allowed. A piece still unresolved after them is kept, and `error` tells. */
   maximumDepth?: number
+  /** Least size the error is held against; 1 for a function that passes through zero. */
+  floor?: number
 }
 
 /** Nodes, and so coefficients, of a piece. */
@@ -47,6 +49,7 @@ function fitPiece(
   low: number,
   high: number,
   coefficients: Float64Array,
+  floor: number,
 ): number {
   const values = new Float64Array(NODES * width)
   const point = new Float64Array(width)
@@ -56,7 +59,7 @@ function fitPiece(
   }
   let tail = 0
   for (let i = 0; i < width; i++) {
-    let size = 1
+    let size = floor
     for (let j = 0; j < NODES; j++) {
       let sum = 0
       for (let k = 0; k < NODES; k++) sum += cosines[j * NODES + k]! * values[k * width + i]!
@@ -77,7 +80,7 @@ export function tabulate(
   high: number,
   options: ChebyshevOptions = {},
 ): ChebyshevTable {
-  const { breaks = [], tolerance = 1e-12, maximumDepth = 9 } = options
+  const { breaks = [], tolerance = 1e-12, maximumDepth = 9, floor = 1 } = options
   const inner = breaks.filter((x) => x > low && x < high)
   const cuts = [...new Set([low, ...inner, high])].sort((a, b) => a - b)
   const edges: number[] = []
@@ -86,7 +89,7 @@ export function tabulate(
 
   const add = (a: number, b: number, depth: number): void => {
     const coefficients = new Float64Array(NODES * width)
-    const tail = fitPiece(f, width, a, b, coefficients)
+    const tail = fitPiece(f, width, a, b, coefficients, floor)
     if (tail > tolerance && depth < maximumDepth) {
       add(a, (a + b) / 2, depth + 1)
       add((a + b) / 2, b, depth + 1)
@@ -116,6 +119,19 @@ export function pieceAt(table: ChebyshevTable, x: number): number {
   return low
 }
 
+/** Clenshaw's recurrence for the series that begins at `start`. */
+function series(coefficients: Float64Array, start: number, z: number): number {
+  const twice = 2 * z
+  let b1 = coefficients[start + NODES - 1]!
+  let b2 = 0
+  for (let j = start + NODES - 2; j > start; j--) {
+    const b0 = coefficients[j]! + twice * b1 - b2
+    b2 = b1
+    b1 = b0
+  }
+  return coefficients[start]! + z * b1 - b2
+}
+
 /** Writes the interpolated functions at x into `out`. */
 export function evaluate(table: ChebyshevTable, x: number, out: Float64Array): void {
   const { width, edges, coefficients } = table
@@ -123,18 +139,16 @@ export function evaluate(table: ChebyshevTable, x: number, out: Float64Array): v
   const low = edges[piece]!
   const high = edges[piece + 1]!
   const z = (2 * x - low - high) / (high - low)
-  const twice = 2 * z
-  for (let i = 0; i < width; i++) {
-    const start = (piece * width + i) * NODES
-    let b1 = 0
-    let b2 = 0
-    for (let j = NODES - 1; j > 0; j--) {
-      const b0 = coefficients[start + j]! + twice * b1 - b2
-      b2 = b1
-      b1 = b0
-    }
-    out[i] = coefficients[start]! + z * b1 - b2
-  }
+  for (let i = 0; i < width; i++) out[i] = series(coefficients, (piece * width + i) * NODES, z)
+}
+
+/** The interpolated function `column` alone at x. */
+export function evaluateColumn(table: ChebyshevTable, column: number, x: number): number {
+  const { width, edges, coefficients } = table
+  const piece = pieceAt(table, x)
+  const low = edges[piece]!
+  const high = edges[piece + 1]!
+  return series(coefficients, (piece * width + column) * NODES, (2 * x - low - high) / (high - low))
 }
 
 /** A table of the integrals of the functions from the low end of the range. */

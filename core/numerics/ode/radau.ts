@@ -118,7 +118,9 @@ class Integration implements OdeStep {
         change = Math.max(change, Math.abs(this.rightSide[k]!) / this.tolerance(k % this.problem.dimension))
       }
       if (!Number.isFinite(change)) return false
-      if (change < 1e-2) return true
+      // Convergence is quadratic: the next change would be change · (change/last)².
+      if (change < 1e-2 || (iteration > 0 && change < last && change * (change / last) ** 2 < 1e-3))
+        return true
       if (iteration > 3 && change > last) return false
       last = change
     }
