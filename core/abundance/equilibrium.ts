@@ -9,7 +9,17 @@ export interface EquilibriumSpecies {
   statistics: Statistics
 }
 
-/** ln Y_eq = ln(n_eq/s) at x = m/T, where the bath has g_s. */
-export function logEquilibriumYield(species: EquilibriumSpecies, x: number, gS: number): number {
-  return Math.log(species.degreesOfFreedom / (ENTROPY_FACTOR * gS)) + logNumberDensity(x, species.statistics)
+/**
+ * ln Y_eq = ln(Σ n_eq/s) at x = m/T, where the bath has g_s and m is the mass x is made of.
+ * The first species is taken as the reference, so that sums of underflowing numbers keep their digits.
+ */
+export function logEquilibriumYield(species: readonly EquilibriumSpecies[], massGeV: number, x: number, gS: number): number {
+  const first = species[0]!
+  const lead = logNumberDensity((x * first.massGeV) / massGeV, first.statistics)
+  let sum = first.degreesOfFreedom
+  for (let i = 1; i < species.length; i++) {
+    const { massGeV: mass, degreesOfFreedom, statistics } = species[i]!
+    sum += degreesOfFreedom * Math.exp(logNumberDensity((x * mass) / massGeV, statistics) - lead)
+  }
+  return Math.log(sum / (ENTROPY_FACTOR * gS)) + lead
 }

@@ -7,11 +7,13 @@ import type { AbundanceResult } from '../wire/compute.ts'
 import { InputError } from '../wire/fault.ts'
 import { checked } from './checked.ts'
 import { logEquilibriumYield } from './equilibrium.ts'
-import { DECAY_RULES, hottestProduction, productionPeak, solveFreezeInDecay } from './freezeInDecay.ts'
-import type { DecaySource } from './freezeInDecay.ts'
-import type { YieldSamples } from './freezeOut.ts'
+import { FREEZE_IN_RULES, productionPeak, solveFreezeIn } from './freezeIn.ts'
+import type { FreezeInSource } from './freezeIn.ts'
+import { decaySource } from './freezeInDecay.ts'
 import { decayGuards, historyGuards } from './guards.ts'
 import { relicDensity } from './relicDensity.ts'
+import { emptySamples } from './yieldSamples.ts'
+import type { YieldSamples } from './yieldSamples.ts'
 
 /** Width of the parent, GeV: as given, or ħ/τ. */
 export function widthOf(candidate: FreezeInDecayInput): number {
@@ -19,32 +21,19 @@ export function widthOf(candidate: FreezeInDecayInput): number {
   return widthGeV ?? HBAR_GEV_S / lifetimeS!
 }
 
-export function decaySource(candidate: FreezeInDecayInput): DecaySource {
-  const { massGeV, degreesOfFreedom, statistics } = candidate.parent
-  return {
-    parent: { massGeV, degreesOfFreedom, statistics },
-    widthGeV: widthOf(candidate),
-    perDecay: candidate.perDecay,
-  }
+function sourceOf(history: ThermalHistory, candidate: FreezeInDecayInput): FreezeInSource {
+  const source = decaySource(history, candidate.parent, widthOf(candidate), candidate.perDecay)
+  refuseUnreachable(history, source)
+  return source
 }
 
 /** Nothing is produced when even the hottest bath holds no parents. */
-function refuseUnreachable(history: ThermalHistory, source: DecaySource): void {
-  const hottest = hottestProduction(history, source.parent)
-  const path =
-    history.input.maximumTemperatureGeV === null
-      ? 'candidate.parent.massGeV'
-      : 'history.maximumTemperatureGeV'
-  if (hottest > source.parent.massGeV / 50 && hottest > 2 * history.temperatureToday) return
-  const value = history.input.maximumTemperatureGeV ?? source.parent.massGeV
-  throw new InputError([
-    {
-      path,
-      value,
-      message:
-        'allowed: a hottest temperature above a fiftieth of the parent’s mass; below it no parents are left to decay',
-    },
-  ])
+function refuseUnreachable(history: ThermalHistory, source: FreezeInSource): void {
+  if (source.hottestGeV > source.scaleGeV / 40 && source.coldestGeV > history.temperatureToday) return
+  const maximum = history.input.maximumTemperatureGeV
+  const path = maximum === null ? 'candidate.parent.massGeV' : 'history.maximumTemperatureGeV'
+  const message = 'allowed: a hottest temperature above a fortieth of the parent’s mass; below it no parents are left to decay'
+  throw new InputError([{ path, value: maximum ?? source.scaleGeV, message }])
 }
 
 /** @throws ConvergenceError, InputError */
@@ -52,25 +41,25 @@ export function freezeInDecayAbundance(
   history: ThermalHistory,
   candidate: FreezeInDecayInput,
 ): AbundanceResult {
-  const source = decaySource(candidate)
-  refuseUnreachable(history, source)
+  const source = sourceOf(history, candidate)
+  const widthGeV = widthOf(candidate)
   const { value: yieldToday, error } = checked(
-    DECAY_RULES.length,
-    (i) => solveFreezeInDecay(history, source, DECAY_RULES[i]!),
+    FREEZE_IN_RULES.length,
+    (i) => solveFreezeIn(history, source, FREEZE_IN_RULES[i]!),
     (found) => found,
     () => history.tableError,
   )
   const peak = productionPeak(history, source)
   const point = emptyExpansion()
   history.at(Math.log(peak), point)
-  const lifetimeS = HBAR_GEV_S / source.widthGeV
+  const lifetimeS = HBAR_GEV_S / widthGeV
   return {
     omegaH2: relicDensity(history, candidate.massGeV, yieldToday),
     yieldToday,
     yieldFreezeIn: yieldToday,
     numericalError: error,
     lifetimeS,
-    widthGeV: source.widthGeV,
+    widthGeV,
     productionTemperatureGeV: peak,
     guards: [
       ...decayGuards({
@@ -78,7 +67,7 @@ export function freezeInDecayAbundance(
         parentMassGeV: candidate.parent.massGeV,
         lifetimeS,
         yieldToday,
-        equilibriumYield: Math.exp(logEquilibriumYield(candidate, candidate.massGeV / peak, point.gS)),
+        equilibriumYield: Math.exp(logEquilibriumYield([candidate], candidate.massGeV, candidate.massGeV / peak, point.gS)),
         maximumTemperatureGeV: history.input.maximumTemperatureGeV,
       }),
       ...historyGuards(history.input),
@@ -92,7 +81,7 @@ export function freezeInDecayYields(
   candidate: FreezeInDecayInput,
   lnX: Float64Array,
 ): YieldSamples {
-  const samples = { lnX, lnYield: new Float64Array(lnX.length).fill(NaN) }
-  solveFreezeInDecay(history, decaySource(candidate), DECAY_RULES[1]!, samples)
+  const samples = emptySamples(lnX)
+  solveFreezeIn(history, sourceOf(history, candidate), FREEZE_IN_RULES[1]!, samples)
   return samples
 }

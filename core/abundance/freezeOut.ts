@@ -1,63 +1,32 @@
 /**
- * Freeze-out: ln Y against ln x by the stiff integrator while production matters, then by quadrature,
- * 1/Y(x₂) = 1/Y(x₁) + ∫ k d ln x, once Y_eq has fallen a millionfold below Y.
- * Restarted wherever the bath steps; Y and T are continuous there, and Y falls by D at a sudden entropy release.
+ * Freeze-out: ln Z against ln x by the stiff integrator while production matters, then by quadrature,
+ * 1/Z(x₂) = 1/Z(x₁) + ∫ k d ln x, once Z_eq has fallen a millionfold below Z for good.
+ * Restarted wherever the bath steps; Z = n a³/(s a³)_today and T are continuous there.
  * Source: Gondolo & Gelmini, Nucl. Phys. B 360 (1991) 145.
  */
 import { solveOde } from '../numerics/ode/radau.ts'
 import type { OdeOptions, OdeProblem, OdeStep } from '../numerics/ode/problem.ts'
-import { gaussLegendre, integrateWith } from '../numerics/quadrature/gaussLegendre.ts'
-import type { QuadratureRule } from '../numerics/quadrature/gaussLegendre.ts'
+import { integrateWith } from '../numerics/quadrature/gaussLegendre.ts'
 import { brent } from '../numerics/roots/brent.ts'
 import type { AnnihilatingState } from './annihilatingState.ts'
 import { integrationFailure } from './convergence.ts'
-import { breaksBetween, panelEdges } from './panels.ts'
+import { panelRule } from './freezeOutEffort.ts'
+import type { Effort } from './freezeOutEffort.ts'
+import { Sampler } from './yieldSamples.ts'
+import type { YieldSamples } from './yieldSamples.ts'
 
 /** How the problem begins. */
 export interface FreezeOutStart {
-  /** x = m/T where it begins, or where equilibrium is known to hold. */
+  /** x = m/T where it begins. */
   x: number
   initialAbundance: 'equilibrium' | 'zero'
-}
-
-/** Numerical effort: the tolerance of a step in ln Y and the quadrature afterwards. */
-export interface Effort {
-  tolerance: number
-  /** The rule while annihilation still matters. */
-  rule: QuadratureRule
-}
-
-/** Rules for panels that add less than 1e-3, and less than 1e-7, to 1/Y. */
-const MINOR_RULE = gaussLegendre(6)
-const SLIGHT_RULE = gaussLegendre(3)
-
-function panelRule(effort: Effort, share: number): QuadratureRule {
-  if (share > 1e-3) return effort.rule
-  return share > 1e-7 ? MINOR_RULE : SLIGHT_RULE
-}
-
-/** Share of 1/Y per e-fold below which the rest of the way, were it a thousand times as much, would not be seen. */
-const NOTHING_MORE = 1e-15
-
-/** Efforts of rising care. Two neighbours that agree vouch for each other; see `checked.ts`. */
-export const EFFORTS: readonly Effort[] = [
-  { tolerance: 1e-4, rule: gaussLegendre(6) },
-  { tolerance: 1e-5, rule: gaussLegendre(8) },
-  { tolerance: 1e-7, rule: gaussLegendre(12) },
-  { tolerance: 1e-9, rule: gaussLegendre(16) },
-]
-
-/** Wanted values of ln x, ascending, and the ln Y found there. */
-export interface YieldSamples {
-  readonly lnX: Float64Array
-  readonly lnYield: Float64Array
 }
 
 export interface FreezeOut {
   yieldToday: number
   /** Where Y = 2.5 Y_eq for the first time; null when Y never was in equilibrium. */
   freezeOutX: number | null
-  /** k Y_eq, about Γ/H, at the start of the integration. */
+  /** k Z_eq, about Γ/H, at the start of the problem. */
   rateAtStart: number
 }
 
@@ -65,232 +34,198 @@ export interface FreezeOut {
 const LN_DEPARTURE = Math.log(2.5)
 
 /**
- * k Y_eq/x from which on equilibrium is certain: the yield then lags by 1/(2·12), known to second order, and the rest of a
- * wrong start is forgotten as exp(−2∫ k Y_eq d ln x) ≈ e^{−24} before freeze-out.
+ * k Z_eq/x from which on equilibrium is certain: the yield then lags by 1/(2·12), known to second order, and the rest of a
+ * wrong start is forgotten as exp(−2∫ k Z_eq d ln x) ≈ e^{−24} before freeze-out.
  */
 const LN_CERTAIN = Math.log(12)
 
-/** Y_eq/Y at which production is dropped: its square, 1e-12, is the relative error made. */
+/** Z_eq/Z at which production is dropped: its square, 1e-12, is the relative error made. */
 const LN_NEGLIGIBLE = Math.log(1e-6)
 
+/** Z − Z_eq relative to Z_eq below which a yield that grew from nothing has arrived. */
+const ARRIVED = 1e-3
+
+/** Share of 1/Z per e-fold below which the rest of the way would not be seen were it a thousand times as much. */
+const NOTHING_MORE = 1e-15
+
 const LATEST_X = 1000
+const WIDEST_PANEL = 2.5
 
 /** What an accepted step means for the way on. */
 type Outcome = 'go on' | 'in equilibrium' | 'production over'
 
 /** Whatever a solve carries along. */
-class FreezeOutRun {
+interface Run {
   readonly state: AnnihilatingState
   readonly effort: Effort
-  readonly samples: YieldSamples | null
-  private nextSample = 0
-  lnX = 0
-  lnYield = 0
-  freezeOutX: number | null = null
+  readonly sampler: Sampler
   readonly watchesFreezeOut: boolean
-
-  constructor(
-    state: AnnihilatingState,
-    effort: Effort,
-    samples: YieldSamples | null,
-    watchesFreezeOut: boolean,
-  ) {
-    this.state = state
-    this.effort = effort
-    this.samples = samples
-    this.watchesFreezeOut = watchesFreezeOut
-  }
-
-  /** Fills samples up to `to`, where ln Y is known as a function. */
-  sample(to: number, lnYieldAt: (lnX: number) => number): void {
-    const { samples } = this
-    if (!samples) return
-    while (this.nextSample < samples.lnX.length && samples.lnX[this.nextSample]! <= to) {
-      samples.lnYield[this.nextSample] = lnYieldAt(samples.lnX[this.nextSample]!)
-      this.nextSample++
-    }
-  }
+  readonly lnXToday: number
+  lnX: number
+  lnZ: number
+  freezeOutX: number | null
 }
 
-/** Y′ in ln Y: y′ = −k (Y − Y_eq²/Y), Y = e^y. */
+/** ln Y from ln Z. */
+function lnYield(state: AnnihilatingState, lnX: number, lnZ: number): number {
+  state.moveTo(lnX)
+  return lnZ + state.lnDilution
+}
+
+/** y = ln Z: y′ = (k Z_eq² + P)/Z − k Z. */
 function logarithmicProblem(state: AnnihilatingState): OdeProblem {
   return {
     dimension: 1,
     evaluate(lnX, y, slope, jacobian) {
       state.moveTo(lnX)
       const loss = state.strength * Math.exp(y[0]!)
-      const gain = state.strength * Math.exp(2 * state.lnEquilibrium - y[0]!)
+      let gain = state.strength * Math.exp(2 * state.lnEquilibrium - y[0]!)
+      if (state.production > 0) gain += state.production * Math.exp(-y[0]!)
       slope[0] = gain - loss
       jacobian[0] = -gain - loss
     },
   }
 }
 
-/** The same in Y/unit, for a start from nothing, where ln Y does not exist. */
+/** The same in Z/unit, for a start from nothing, where ln Z does not exist. */
 function linearProblem(state: AnnihilatingState, unit: number): OdeProblem {
   return {
     dimension: 1,
     evaluate(lnX, y, slope, jacobian) {
       state.moveTo(lnX)
-      slope[0] = state.strength * (Math.exp(2 * state.lnEquilibrium) / unit - unit * y[0]! * y[0]!)
+      slope[0] = (state.strength * Math.exp(2 * state.lnEquilibrium) + state.production) / unit - state.strength * unit * y[0]! * y[0]!
       jacobian[0] = -2 * state.strength * unit * y[0]!
     },
   }
 }
 
+/** ln(k Z_eq/x) − ln 12: positive where equilibrium is certain. */
+function certainty(state: AnnihilatingState, lnX: number): number {
+  state.moveTo(lnX)
+  return Math.log(state.strength) + state.lnEquilibrium - Math.max(lnX, 0) - LN_CERTAIN
+}
+
 /** The ln x after which equilibrium is not certain any more, looked for from the cold side so that it is the last one. */
 function lastCertainty(state: AnnihilatingState, from: number): number {
-  const excess = (lnX: number): number => {
-    state.moveTo(lnX)
-    return Math.log(state.strength) + state.lnEquilibrium - Math.max(lnX, 0) - LN_CERTAIN
-  }
   let late = Math.log(LATEST_X)
-  let lateExcess = excess(late)
+  let lateExcess = certainty(state, late)
   while (late > from) {
     const early = Math.max(from, late - 0.25)
-    const earlyExcess = excess(early)
-    if (earlyExcess > 0)
-      return lateExcess > 0 ? late : early + ((late - early) * earlyExcess) / (earlyExcess - lateExcess)
+    const earlyExcess = certainty(state, early)
+    if (earlyExcess > 0) return lateExcess > 0 ? late : early + ((late - early) * earlyExcess) / (earlyExcess - lateExcess)
     late = early
     lateExcess = earlyExcess
   }
   return from
 }
 
-/** ln of the yield that follows equilibrium to first order in H/Γ. */
+/** ln Z that follows equilibrium to first order in H/Γ. */
 function followingYield(state: AnnihilatingState, lnX: number): number {
   const h = 1e-3
   state.moveTo(lnX + h)
   const after = state.lnEquilibrium
   state.moveTo(lnX)
   const lag = -(after - state.lnEquilibrium) / h / (2 * state.strength * Math.exp(state.lnEquilibrium))
-  return state.lnEquilibrium + Math.log1p(Math.max(0, Math.min(lag, 1)))
+  return steadyYield(state) + Math.log1p(Math.max(0, Math.min(lag, 1)))
 }
 
-function solveStretch(
-  run: FreezeOutRun,
-  problem: OdeProblem,
-  y: number,
-  to: number,
-  options: OdeOptions,
-): number {
+/** ln Z at which gain and loss balance: equilibrium, unless something else produces the particle. */
+function steadyYield(state: AnnihilatingState): number {
+  if (state.production === 0) return state.lnEquilibrium
+  return Math.log(Math.exp(2 * state.lnEquilibrium) + state.production / state.strength) / 2
+}
+
+function solveStretch(run: Run, problem: OdeProblem, y: number, to: number, options: OdeOptions): number {
   const solution = solveOde(problem, run.lnX, [y], to, options)
   if (solution.status === 'failed') throw integrationFailure(solution.reason, Math.exp(solution.t))
   run.lnX = solution.t
   return solution.y[0]!
 }
 
-/** The first stretch from nothing, in Y itself; short, and shorter than the way to the next break. */
-function leaveZero(run: FreezeOutRun): void {
+/** The first stretch from nothing, in Z itself; short, and shorter than the way to the next break. */
+function leaveZero(run: Run): void {
   const { state } = run
-  const hot = state.lnMass - run.lnX
-  const next = breaksBetween(state.history, hot, hot - 0.1)[0] ?? hot - 0.1
-  const length = (hot - next) / 2
+  const next = state.breaksBetween(run.lnX, run.lnX + 0.1)[0] ?? run.lnX + 0.1
+  const length = (next - run.lnX) / 2
+  state.stayWithin(run.lnX, next)
   state.moveTo(run.lnX)
-  const equilibrium = Math.exp(state.lnEquilibrium)
+  const equilibrium = Math.exp(steadyYield(state))
   const unit = Math.min(1, length * state.strength * equilibrium) * equilibrium
-  const y = solveStretch(run, linearProblem(state, unit), 0, run.lnX + length, {
+  const z = solveStretch(run, linearProblem(state, unit), 0, run.lnX + length, {
     absoluteTolerance: run.effort.tolerance,
     firstStep: 1e-4 * length,
-    onStep: (step) => run.sample(step.to, (lnX) => Math.log(unit * step.at(lnX, 0))),
+    onStep: (step) => run.sampler.upTo(step.to, (lnX) => lnYield(state, lnX, Math.log(unit * step.at(lnX, 0)))),
   })
-  run.lnYield = Math.log(unit * y)
+  run.lnZ = Math.log(unit * z)
 }
 
-/** Y − Y_eq relative to Y_eq below which a yield that grew from nothing has arrived. */
-const ARRIVED = 1e-3
-
 /** Follows one accepted step: samples, the moment of freeze-out, and what it means for the way on. */
-function followStep(run: FreezeOutRun, step: OdeStep, lnStillToDilute: number): Outcome {
+function followStep(run: Run, step: OdeStep): Outcome {
   const { state } = run
   const lead = (lnX: number): number => {
     state.moveTo(lnX)
     return step.at(lnX, 0) - state.lnEquilibrium
   }
-  run.sample(step.to, (lnX) => step.at(lnX, 0))
+  run.sampler.upTo(step.to, (lnX) => lnYield(state, lnX, step.at(lnX, 0)))
   const leadAtEnd = lead(step.to)
   if (run.watchesFreezeOut && run.freezeOutX === null && leadAtEnd > LN_DEPARTURE) {
     const early = lead(step.from) - LN_DEPARTURE
-    run.freezeOutX = Math.exp(
-      early >= 0 ? step.from : brent((lnX) => lead(lnX) - LN_DEPARTURE, step.from, step.to, 1e-13),
-    )
+    run.freezeOutX = Math.exp(early >= 0 ? step.from : brent((lnX) => lead(lnX) - LN_DEPARTURE, step.from, step.to, 1e-13))
+    state.moveTo(step.to)
   }
-  if (-leadAtEnd < LN_NEGLIGIBLE - lnStillToDilute) return 'production over'
-  const certain = Math.log(state.strength) + state.lnEquilibrium > Math.max(step.to, 0) + LN_CERTAIN
-  return !run.watchesFreezeOut && certain && Math.abs(leadAtEnd) < ARRIVED ? 'in equilibrium' : 'go on'
+  // Z_eq may still rise by what is left of the dilution, and no more.
+  if (state.productionOver && leadAtEnd > state.lnDilution - LN_NEGLIGIBLE) return 'production over'
+  return !run.watchesFreezeOut && Math.abs(leadAtEnd) < ARRIVED && certainty(state, step.to) > 0 ? 'in equilibrium' : 'go on'
 }
 
-/** ln D of a sudden entropy release at that break, else 0. */
-function dilutionAt(run: FreezeOutRun, lnT: number): number {
-  const step = run.state.history.entropyStep
-  return step && Math.abs(lnT - Math.log(step.temperature)) < 1e-12 ? Math.log(step.factor) : 0
-}
-
-/** The integration while production matters; ends at today, where production is over, or where Y has come to equilibrium. */
-function whileProduced(run: FreezeOutRun, lnXToday: number): Outcome {
+/** The integration while production matters; ends at today, where production is over, or where Z has come to equilibrium. */
+function whileProduced(run: Run): Outcome {
   const { state } = run
   const problem = logarithmicProblem(state)
-  const step = state.history.entropyStep
-  const ends = [
-    ...breaksBetween(state.history, state.lnMass - run.lnX, state.lnMass - lnXToday).map(
-      (lnT) => state.lnMass - lnT,
-    ),
-    lnXToday,
-  ]
-  for (const end of ends) {
-    state.stayBelow(state.lnMass - run.lnX)
-    const ahead =
-      step && step.temperature < Math.exp(state.lnMass - run.lnX) * (1 - 1e-12) ? Math.log(step.factor) : 0
+  for (const end of [...state.breaksBetween(run.lnX, run.lnXToday), run.lnXToday]) {
+    state.stayWithin(run.lnX, end)
     let outcome: Outcome = 'go on'
-    run.lnYield = solveStretch(run, problem, run.lnYield, end, {
+    run.lnZ = solveStretch(run, problem, run.lnZ, end, {
       absoluteTolerance: run.effort.tolerance,
       firstStep: Math.min(0.02, end - run.lnX),
-      onStep: (accepted) => (outcome = followStep(run, accepted, ahead)) !== 'go on',
+      onStep: (accepted) => (outcome = followStep(run, accepted)) !== 'go on',
     })
-    if (run.lnX === end) run.lnYield -= dilutionAt(run, state.lnMass - end)
     if (outcome !== 'go on') return outcome
   }
   return 'go on'
 }
 
-/** What annihilation still does without production: 1/Y grows by ∫ k d ln x. */
-function afterProduction(run: FreezeOutRun, lnXToday: number): void {
+/** What annihilation still does without production: 1/Z grows by ∫ k d ln x. */
+function afterProduction(run: Run): void {
   const { state, effort } = run
   const strengthAt = (lnX: number): number => {
     state.moveTo(lnX)
     return state.strength
   }
-  let inverse = Math.exp(-run.lnYield)
-  const edges = panelEdges(state.history, state.lnMass - run.lnX, state.lnMass - lnXToday, 2.5).map(
-    (lnT) => state.lnMass - lnT,
-  )
+  let inverse = Math.exp(-run.lnZ)
+  const edges = state.panelEdges(run.lnX, run.lnXToday, WIDEST_PANEL)
   for (let i = 0; i + 1 < edges.length; i++) {
     const [from, to] = [edges[i]!, edges[i + 1]!]
-    state.stayBelow(state.lnMass - from)
+    state.stayWithin(from, to)
     const start = inverse
     const share = strengthAt(from) / inverse
     const rule = panelRule(effort, share)
-    run.sample(to, (lnX) => -Math.log(start + integrateWith(rule, strengthAt, from, lnX)))
+    run.sampler.upTo(to, (lnX) => lnYield(state, lnX, -Math.log(start + integrateWith(rule, strengthAt, from, lnX))))
     inverse += share < NOTHING_MORE ? 0 : integrateWith(rule, strengthAt, from, to)
-    inverse *= Math.exp(dilutionAt(run, state.lnMass - to))
   }
-  run.lnX = lnXToday
-  run.lnYield = -Math.log(inverse)
+  run.lnX = run.lnXToday
+  run.lnZ = -Math.log(inverse)
 }
 
 /** Puts the run where equilibrium is last certain, with the yield that follows it. */
-function followEquilibrium(run: FreezeOutRun, from: number): void {
+function followEquilibrium(run: Run, from: number): void {
   const { state } = run
-  state.stayAnywhere()
+  state.readAll()
   const last = lastCertainty(state, from)
-  run.sample(last, (lnX) => {
-    state.moveTo(lnX)
-    return state.lnEquilibrium
-  })
+  run.sampler.upTo(last, (lnX) => lnYield(state, lnX, state.lnEquilibrium))
   run.lnX = last
-  state.stayBelow(state.lnMass - last)
   state.moveTo(last)
-  run.lnYield = last > from ? followingYield(state, last) : state.lnEquilibrium
+  run.lnZ = last > from ? followingYield(state, last) : state.lnEquilibrium
 }
 
 /**
@@ -298,27 +233,30 @@ function followEquilibrium(run: FreezeOutRun, from: number): void {
  * @param samples wanted values of ln x; ln Y is written there, NaN before the start
  * @throws ConvergenceError when the integrator does not arrive
  */
-export function solveFreezeOut(
-  state: AnnihilatingState,
-  start: FreezeOutStart,
-  effort: Effort,
-  samples: YieldSamples | null = null,
-): FreezeOut {
+export function solveFreezeOut(state: AnnihilatingState, start: FreezeOutStart, effort: Effort, samples: YieldSamples | null = null): FreezeOut {
   const fromEquilibrium = start.initialAbundance === 'equilibrium'
-  const run = new FreezeOutRun(state, effort, samples, fromEquilibrium)
-  const lnXToday = state.lnMass - Math.log(state.history.temperatureToday)
-  run.lnX = Math.log(start.x)
-  run.sample(run.lnX - 1e-12, () => NaN)
-  state.stayBelow(state.lnMass - run.lnX)
-  state.moveTo(run.lnX)
+  const lnStart = Math.log(start.x)
+  const run: Run = {
+    state,
+    effort,
+    sampler: new Sampler(samples),
+    watchesFreezeOut: fromEquilibrium,
+    lnXToday: state.lnMass - Math.log(state.history.temperatureToday),
+    lnX: lnStart,
+    lnZ: 0,
+    freezeOutX: null,
+  }
+  run.sampler.upTo(lnStart - 1e-12, () => NaN)
+  state.readAll()
+  state.moveTo(lnStart)
   const rateAtStart = state.strength * Math.exp(state.lnEquilibrium)
-  if (fromEquilibrium) followEquilibrium(run, run.lnX)
+  if (fromEquilibrium) followEquilibrium(run, lnStart)
   else leaveZero(run)
-  let outcome = whileProduced(run, lnXToday)
+  let outcome = whileProduced(run)
   if (outcome === 'in equilibrium') {
     followEquilibrium(run, run.lnX)
-    outcome = whileProduced(run, lnXToday)
+    outcome = whileProduced(run)
   }
-  if (outcome === 'production over') afterProduction(run, lnXToday)
-  return { yieldToday: Math.exp(run.lnYield), freezeOutX: run.freezeOutX, rateAtStart }
+  if (outcome === 'production over') afterProduction(run)
+  return { yieldToday: Math.exp(run.lnZ), freezeOutX: run.freezeOutX, rateAtStart }
 }

@@ -7,26 +7,25 @@ import type { AbundanceResult } from '../wire/compute.ts'
 import { InputError } from '../wire/fault.ts'
 import { AnnihilatingState } from './annihilatingState.ts'
 import { checked } from './checked.ts'
-import type { EquilibriumSpecies } from './equilibrium.ts'
-import { EFFORTS, solveFreezeOut } from './freezeOut.ts'
-import type { FreezeOut, FreezeOutStart, YieldSamples } from './freezeOut.ts'
+import { solveFreezeOut } from './freezeOut.ts'
+import type { FreezeOut, FreezeOutStart } from './freezeOut.ts'
+import { EFFORTS, LEFT_OF_TOLERANCE } from './freezeOutEffort.ts'
 import { freezeOutGuards, historyGuards } from './guards.ts'
 import { annihilationRate } from './rates/annihilationRate.ts'
 import { relicDensity } from './relicDensity.ts'
+import { emptySamples } from './yieldSamples.ts'
+import type { YieldSamples } from './yieldSamples.ts'
 
 /** The candidate as the equations see it. */
 export function annihilatingState(history: ThermalHistory, candidate: FreezeOutInput): AnnihilatingState {
-  const species: EquilibriumSpecies = {
-    massGeV: candidate.massGeV,
-    degreesOfFreedom: candidate.degreesOfFreedom,
-    statistics: candidate.equilibriumStatistics === 'exact' ? candidate.statistics : 'maxwell-boltzmann',
-  }
-  return new AnnihilatingState(
-    history,
-    species,
-    annihilationRate(candidate.annihilation),
-    candidate.selfConjugate,
-  )
+  const { massGeV, degreesOfFreedom, selfConjugate } = candidate
+  const statistics = candidate.equilibriumStatistics === 'exact' ? candidate.statistics : 'maxwell-boltzmann'
+  return new AnnihilatingState(history, {
+    massGeV,
+    species: [{ massGeV, degreesOfFreedom, statistics }],
+    rate: annihilationRate(candidate.annihilation),
+    selfConjugate,
+  })
 }
 
 /** Where the integration may begin: x = 1 or `startX`, or the maximum temperature when that is colder. */
@@ -55,7 +54,7 @@ export function startOf(history: ThermalHistory, candidate: FreezeOutInput): Fre
 
 /** Temperature, GeV, of the last moment when n_eq⟨σv⟩ = H. */
 function rateEqualsHubble(state: AnnihilatingState, fromX: number): number | undefined {
-  state.stayAnywhere()
+  state.readAll()
   const excess = (lnX: number): number => Math.log(state.rateOverHubble(lnX))
   const early = Math.log(fromX)
   for (let lnX = early; lnX < early + 1.5; lnX += 0.05) {
@@ -67,13 +66,13 @@ function rateEqualsHubble(state: AnnihilatingState, fromX: number): number | und
 
 /** The facts of freeze-out at x_f. */
 function atFreezeOut(state: AnnihilatingState, x: number): Partial<AbundanceResult> {
-  state.stayAnywhere()
+  state.readAll()
   const rate = state.rateOverHubble(Math.log(x))
   const equal = rateEqualsHubble(state, x)
   return {
     freezeOutX: x,
     freezeOutTemperatureGeV: Math.exp(state.lnMass) / x,
-    sigmaVAtFreezeOutCm3PerS: state.crossSection(x) / GEV_MINUS2_PER_CM3_S,
+    sigmaVAtFreezeOutCm3PerS: state.particle.rate.at(x) / GEV_MINUS2_PER_CM3_S,
     rateOverHubbleAtFreezeOut: rate,
     ...(equal === undefined ? {} : { rateEqualsHubbleTemperatureGeV: equal }),
   }
@@ -95,7 +94,7 @@ function guardsOf(
   return [
     ...freezeOutGuards({
       massGeV: candidate.massGeV,
-      freezeOut: x === null ? null : { x, crossSectionGeVMinus2: state.crossSection(x) },
+      freezeOut: x === null ? null : { x, crossSectionGeVMinus2: state.particle.rate.at(x) },
       highestWave: pWave ? 1 : 0,
       startsFromEquilibrium: candidate.initialAbundance === 'equilibrium',
       rateAtStart: solution.rateAtStart,
@@ -105,9 +104,6 @@ function guardsOf(
     ...historyGuards(history.input),
   ]
 }
-
-/** Global error of the order-9 solution over the tolerance of its order-5 estimate; at most this in all reference cases. */
-const LEFT_OF_TOLERANCE = 5e-4
 
 /** @throws ConvergenceError, InputError */
 export function freezeOutAbundance(history: ThermalHistory, candidate: FreezeOutInput): AbundanceResult {
@@ -134,7 +130,7 @@ export function freezeOutYields(
   candidate: FreezeOutInput,
   lnX: Float64Array,
 ): YieldSamples {
-  const samples = { lnX, lnYield: new Float64Array(lnX.length).fill(NaN) }
+  const samples = emptySamples(lnX)
   solveFreezeOut(annihilatingState(history, candidate), startOf(history, candidate), EFFORTS[1]!, samples)
   return samples
 }

@@ -1,26 +1,27 @@
-/** Panels on which a function of the history is smooth: between breaks and edges of its table, none wider than asked. */
+/** Where a function of the history is smooth: between breaks, and on panels between the edges of its table. */
 import type { ThermalHistory } from '../history/thermalHistory.ts'
 
-/** Edges in ln T, descending from `hot` to `cold`. */
-export function panelEdges(history: ThermalHistory, hot: number, cold: number, widest: number): number[] {
-  const inner = [...history.radiation.table.edges, ...history.breaks.map(Math.log)].filter(
-    (edge) => edge > cold && edge < hot,
-  )
-  const cuts = [...new Set([hot, cold, ...inner])].sort((a, b) => b - a)
+/** Values closer than this, in a logarithm, are one. */
+const SAME = 1e-12
+
+/** Edges in ln T, descending from `hot` to `cold`, none farther apart than `widest`. */
+export function panelEdges(history: ThermalHistory, hot: number, cold: number, widest: number, more: readonly number[] = []): number[] {
+  const inner = [...history.radiation.table.edges, ...history.breaks.map(Math.log), ...more].filter((edge) => edge > cold && edge < hot)
+  const cuts = [hot, ...inner.sort((a, b) => b - a), cold]
   const edges = [hot]
-  for (let i = 0; i + 1 < cuts.length; i++) {
-    const [from, to] = [cuts[i]!, cuts[i + 1]!]
-    if (from - to < 1e-12) continue
+  for (const to of cuts.slice(1)) {
+    const from = edges.at(-1)!
+    if (from - to < SAME) continue
     const parts = Math.ceil((from - to) / widest)
-    for (let k = 1; k <= parts; k++) edges.push(from - ((from - to) * k) / parts)
+    for (let k = 1; k < parts; k++) edges.push(from - ((from - to) * k) / parts)
+    edges.push(to)
   }
   return edges
 }
 
-/** Breaks of the history, as ln T, strictly between two values: where an integrator restarts. Descending. */
-export function breaksBetween(history: ThermalHistory, hot: number, cold: number): number[] {
-  return history.breaks
-    .map(Math.log)
-    .filter((edge) => edge < hot - 1e-12 && edge > cold + 1e-12)
+/** Breaks of the history and those given, as ln T, strictly between two values: where an integrator restarts. Descending. */
+export function breaksBetween(history: ThermalHistory, hot: number, cold: number, more: readonly number[] = []): number[] {
+  return [...new Set([...history.breaks.map(Math.log), ...more])]
+    .filter((edge) => edge < hot - SAME && edge > cold + SAME)
     .sort((a, b) => b - a)
 }

@@ -71,7 +71,7 @@ export function equilibriumCurve(
       : candidate.parent
   return curve(temperatureGeV, (temperature) => {
     history.at(Math.log(temperature), point)
-    return Math.exp(logEquilibriumYield(species, species.massGeV / temperature, point.gS))
+    return Math.exp(logEquilibriumYield([species], species.massGeV, species.massGeV / temperature, point.gS))
   })
 }
 

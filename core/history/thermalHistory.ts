@@ -28,22 +28,28 @@ export interface ExpansionPoint {
   temperature: number
   gRho: number
   gS: number
-  /** δ_s = (1/3) d ln g_s/d ln T. */
-  delta: number
+  /** −d ln a/d ln T: 1 + δ_s with δ_s = (1/3) d ln g_s/d ln T while entropy is conserved, more while it grows. */
+  stretch: number
   entropy: number
   /** Of radiation and fluid; matter and Λ are left out, as the abundance solver leaves them out. */
   energy: number
   hubble: number
+  /** ln of what s a³ still grows by until today: zero when entropy is conserved from here on. */
+  lnDilution: number
+  /** Candidates that a decaying matter field makes per volume and time, GeV⁴. */
+  candidatesPerTime: number
 }
 
 export const emptyExpansion = (): ExpansionPoint => ({
   temperature: 0,
   gRho: 0,
   gS: 0,
-  delta: 0,
+  stretch: 0,
   entropy: 0,
   energy: 0,
   hubble: 0,
+  lnDilution: 0,
+  candidatesPerTime: 0,
 })
 
 export interface ThermalHistory {
@@ -59,6 +65,8 @@ export interface ThermalHistory {
   readonly entropyStep: { temperature: number; factor: number } | null
   /** Present when a fluid drives the expansion for a while. */
   readonly fluid: FluidDensity | null
+  /** Temperature, GeV, down to which a decaying field makes candidates; null when none does. */
+  readonly producesUntil: number | null
   /** Relative error of the tabulated numbers. */
   readonly tableError: number
   /** Writes the state at ln(T/GeV) into `out`; no allocation. */
@@ -77,17 +85,20 @@ export function buildHistory(input: HistoryInput): ThermalHistory {
     out.temperature = temperature
     out.gRho = columns[G_RHO]!
     out.gS = columns[G_S]!
-    out.delta = columns[LOG_SLOPE]! / 3
+    out.stretch = 1 + columns[LOG_SLOPE]! / 3
     const cubed = temperature * temperature * temperature
     out.entropy = ENTROPY_FACTOR * out.gS * cubed
     out.energy = ENERGY_FACTOR * out.gRho * cubed * temperature
     if (fluid) out.energy += fluid.energy(temperature, out.gS)
     out.hubble = hubbleOf(out.energy)
+    out.lnDilution = lnT > lnStep ? lnReleased : 0
   }
 
   const fluid = input.expansion.kind === 'fluid' ? fluidDensity(input.expansion, radiation) : null
   const step = input.expansion.kind === 'entropy-step' ? input.expansion : null
   const entropyStep = step && { temperature: step.temperatureGeV, factor: step.factor }
+  const lnReleased = Math.log(entropyStep?.factor ?? 1)
+  const lnStep = Math.log(entropyStep?.temperature ?? Infinity)
   const temperatureToday = input.today.temperatureK * GEV_PER_KELVIN
   return {
     input,
@@ -99,6 +110,7 @@ export function buildHistory(input: HistoryInput): ThermalHistory {
       : radiation.breaks,
     entropyStep,
     fluid,
+    producesUntil: null,
     tableError: table.error,
     at,
   }

@@ -20,7 +20,7 @@ export function ages(history: ThermalHistory, temperaturesGeV: readonly number[]
   const point = emptyExpansion()
   const perLnT = (lnT: number): number => {
     history.at(lnT, point)
-    return (1 + point.delta) / hubbleOf(point.energy + late.matter(point) + late.darkEnergy(point))
+    return point.stretch / hubbleOf(point.energy + late.matter(point) + late.darkEnergy(point))
   }
   const order = temperaturesGeV.map((_, i) => i).sort((i, j) => temperaturesGeV[j]! - temperaturesGeV[i]!)
   const hottest = Math.max(START_GEV, temperaturesGeV[order[0]!] ?? 0)

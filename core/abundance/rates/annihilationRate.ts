@@ -1,8 +1,13 @@
 import { GEV_MINUS2_PER_CM3_S } from '../../constants/natural.ts'
 import type { AnnihilationInput } from '../../wire/candidate.ts'
 
-/** ⟨σv⟩ in GeV⁻² as a function of x = m/T. */
-export type AnnihilationRate = (x: number) => number
+/** A thermally averaged annihilation cross-section. */
+export interface AnnihilationRate {
+  /** ⟨σv⟩ in GeV⁻² at x = m/T. */
+  at(x: number): number
+  /** Values of x where a derivative jumps. */
+  readonly breaks: readonly number[]
+}
 
 /**
  * The thermally averaged annihilation cross-section of an input.
@@ -14,11 +19,11 @@ export function annihilationRate(annihilation: AnnihilationInput): AnnihilationR
     case 'partial-waves': {
       const a = annihilation.sWaveCm3PerS * GEV_MINUS2_PER_CM3_S
       const b = 6 * annihilation.pWaveCm3PerS * GEV_MINUS2_PER_CM3_S
-      return (x) => a + b / x
+      return { at: (x) => a + b / x, breaks: [] }
     }
     case 'power-law': {
       const coefficient = annihilation.coefficientCm3PerS * GEV_MINUS2_PER_CM3_S
-      return (x) => coefficient * x ** -annihilation.exponent
+      return { at: (x) => coefficient * x ** -annihilation.exponent, breaks: [] }
     }
   }
 }
