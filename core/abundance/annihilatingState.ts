@@ -8,7 +8,7 @@
  * P is what a decaying matter field feeds in.
  * Source: Gondolo & Gelmini, Nucl. Phys. B 360 (1991) 145.
  */
-import { emptyExpansion } from '../history/thermalHistory.ts'
+import { emptyExpansion } from '../history/expansionPoint.ts'
 import type { ThermalHistory } from '../history/thermalHistory.ts'
 import { logEquilibriumYield } from './equilibrium.ts'
 import type { EquilibriumSpecies } from './equilibrium.ts'

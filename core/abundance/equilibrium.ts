@@ -1,6 +1,6 @@
 import type { Statistics } from '../bath/speciesIntegrals.ts'
 import { logNumberDensity } from '../bath/speciesTable.ts'
-import { ENTROPY_FACTOR } from '../history/thermalHistory.ts'
+import { ENTROPY_FACTOR } from '../history/expansionPoint.ts'
 
 /** What equilibrium needs to know of a particle. */
 export interface EquilibriumSpecies {

@@ -6,7 +6,7 @@
  * a quadrature between the breaks of the history, from nothing at the hottest temperature.
  * Source: Hall, Jedamzik, March-Russell, West, JHEP 03 (2010) 080.
  */
-import { emptyExpansion } from '../history/thermalHistory.ts'
+import { emptyExpansion } from '../history/expansionPoint.ts'
 import type { ThermalHistory } from '../history/thermalHistory.ts'
 import { gaussLegendre, integrateWith } from '../numerics/quadrature/gaussLegendre.ts'
 import type { QuadratureRule } from '../numerics/quadrature/gaussLegendre.ts'
@@ -57,7 +57,7 @@ export function solveFreezeIn(history: ThermalHistory, source: FreezeInSource, r
   }
   const hot = Math.log(source.hottestGeV)
   const today = Math.log(history.temperatureToday)
-  const cold = Math.max(today, Math.log(Math.min(source.coldestGeV, history.producesUntil ?? Infinity)))
+  const cold = Math.max(today, Math.log(Math.min(source.coldestGeV, history.expansion.producesUntil ?? Infinity)))
   const edges = panelEdges(history, hot, cold, WIDEST_PANEL, source.breaks.map(Math.log))
   let z = 0
   sampler.upTo(lnScale - hot - 1e-12, () => NaN)

@@ -1,6 +1,6 @@
 /** From a freeze-in-by-decay candidate on the wire to its result. */
 import { HBAR_GEV_S } from '../constants/natural.ts'
-import { emptyExpansion } from '../history/thermalHistory.ts'
+import { emptyExpansion } from '../history/expansionPoint.ts'
 import type { ThermalHistory } from '../history/thermalHistory.ts'
 import type { FreezeInDecayInput } from '../wire/candidate.ts'
 import type { AbundanceResult } from '../wire/compute.ts'

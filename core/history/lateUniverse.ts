@@ -6,8 +6,9 @@
  * They begin at 1e-6 GeV, where H steps by about 4e-4. The abundance solver leaves them out.
  */
 import { CRITICAL_DENSITY_GEV4 } from '../constants/natural.ts'
-import { emptyExpansion } from './thermalHistory.ts'
-import type { ExpansionPoint, ThermalHistory } from './thermalHistory.ts'
+import { emptyExpansion } from './expansionPoint.ts'
+import type { ExpansionPoint } from './expansionPoint.ts'
+import type { ThermalHistory } from './thermalHistory.ts'
 
 /** Below this temperature, GeV, matter and Λ count. */
 export const LATE_GEV = 1e-6

@@ -4,8 +4,9 @@ import { HBARC_GEV_CM, HBAR_GEV_S, SOLAR_MASS_GEV } from '../constants/natural.t
 import type { HistoryRow } from '../wire/compute.ts'
 import { LATE_GEV, lateUniverse } from './lateUniverse.ts'
 import { ages } from './time.ts'
-import { ENERGY_FACTOR, ENTROPY_FACTOR, emptyExpansion, hubbleOf } from './thermalHistory.ts'
-import type { ExpansionPoint, ThermalHistory } from './thermalHistory.ts'
+import { emptyExpansion, hubbleOf, setRadiation } from './expansionPoint.ts'
+import type { ExpansionPoint } from './expansionPoint.ts'
+import type { ThermalHistory } from './thermalHistory.ts'
 
 /** Entropy density today, cm⁻³. */
 export const entropyTodayPerCm3 = (history: ThermalHistory): number =>
@@ -17,11 +18,9 @@ export function pressureUndefinedBecause(history: ThermalHistory): string | unde
   return 'below 10^0.5 MeV the 2018 fit gives ρ and s only, and p = Ts − ρ does not hold once neutrinos have their own temperature'
 }
 
-/** a/a₀ = (s₀/s)^{1/3}, and above a sudden entropy release of factor D (s₀/(D s))^{1/3}. */
-export function scaleFactor(history: ThermalHistory, temperatureGeV: number, entropy: number): number {
-  const step = history.entropyStep
-  const released = step && temperatureGeV > step.temperature ? step.factor : 1
-  return Math.cbrt(history.entropyToday / (released * entropy))
+/** a/a₀ = (s₀/(s e^{lnDilution}))^{1/3}: entropy still to be released makes a smaller. */
+export function scaleFactor(history: ThermalHistory, point: ExpansionPoint): number {
+  return Math.cbrt(history.entropyToday / (Math.exp(point.lnDilution) * point.entropy))
 }
 
 /** One row for each temperature, GeV, in the order given. */
@@ -31,47 +30,40 @@ export function historyRows(history: ThermalHistory, temperaturesGeV: readonly n
   const { bath, apart } = history.radiation
   const point = emptyPoint()
   const other = { gRho: 0, gP: 0 }
+  const state = emptyExpansion()
   const hasSpeciesApart = history.input.extraSpecies.some((species) => species.coupling.kind !== 'bath')
   const neutrinosDecouple = history.input.neutrinos.decouplingTemperatureGeV
 
   return temperaturesGeV.map((temperature, i) => {
     bath.evaluate(temperature, point)
     apart.evaluate(temperature, point.gS, other)
-    const gRho = point.gRho + other.gRho
     const logSlope = point.gSSlope / point.gS
-    const entropy = ENTROPY_FACTOR * point.gS * temperature ** 3
-    const fluid = history.fluid?.energy(temperature, point.gS) ?? 0
-    const state: ExpansionPoint = {
-      ...emptyExpansion(),
-      temperature,
-      entropy,
-      energy: ENERGY_FACTOR * gRho * temperature ** 4 + fluid,
-    }
+    setRadiation(state, temperature, point.gRho + other.gRho, point.gS, logSlope)
+    history.expansion.complete(Math.log(temperature), state)
     const matter = late.matter(state)
     const darkEnergy = late.darkEnergy(state)
     const energy = state.energy + matter + darkEnergy
     const hubble = hubbleOf(energy)
-    const fluidPressure = ((1 + (history.fluid?.index ?? 0)) / 3) * fluid
-    const pressure =
-      (Math.PI ** 2 / 90) * (point.gP + other.gP) * temperature ** 4 + fluidPressure - darkEnergy
+    const radiationPressure = (Math.PI ** 2 / 90) * (point.gP + other.gP) * temperature ** 4
+    const pressure = radiationPressure + state.otherPressure - darkEnergy
     const defined = Number.isFinite(pressure)
-    const oneTemperature =
-      defined && !history.fluid && !hasSpeciesApart && temperature > Math.max(neutrinosDecouple, LATE_GEV)
-    const a = scaleFactor(history, temperature, entropy)
+    const oneTemperature = !hasSpeciesApart && temperature > Math.max(neutrinosDecouple, LATE_GEV)
+    const barotropic = defined && oneTemperature && history.expansion.radiationOnly(temperature)
+    const a = scaleFactor(history, state)
     return {
       temperatureGeV: temperature,
-      gRho,
-      gS: point.gS,
-      gStarHalf: (point.gS / Math.sqrt(gRho)) * (1 + logSlope / 3),
+      gRho: state.gRho,
+      gS: state.gS,
+      gStarHalf: (state.gS / Math.sqrt(state.gRho)) * (1 + logSlope / 3),
       dLnGsDLnT: logSlope,
       energyDensityGeV4: energy,
       pressureGeV4: defined ? pressure : null,
-      entropyDensityGeV3: entropy,
+      entropyDensityGeV3: state.entropy,
       hubbleGeV: hubble,
       timeS: times[i]!,
       scaleFactor: a,
       equationOfState: defined ? pressure / energy : null,
-      soundSpeedSquared: oneTemperature ? 1 / (3 + logSlope) : null,
+      soundSpeedSquared: barotropic ? 1 / (3 + logSlope) : null,
       waveFrequencyHz: (a * hubble) / (2 * Math.PI) / HBAR_GEV_S,
       horizonMassSolar: ((4 * Math.PI) / 3) * (energy / hubble ** 3 / SOLAR_MASS_GEV),
       ...(temperature < LATE_GEV ? { matterDensityGeV4: matter, darkEnergyDensityGeV4: darkEnergy } : {}),

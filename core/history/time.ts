@@ -5,11 +5,8 @@
 import { HBAR_GEV_S } from '../constants/natural.ts'
 import { gaussLegendre, integrateWith } from '../numerics/quadrature/gaussLegendre.ts'
 import { LATE_GEV, lateUniverse } from './lateUniverse.ts'
-import { emptyExpansion, hubbleOf } from './thermalHistory.ts'
+import { emptyExpansion, hubbleOf } from './expansionPoint.ts'
 import type { ThermalHistory } from './thermalHistory.ts'
-
-/** Where the age is taken from the local expansion rate, GeV. */
-const START_GEV = 1e8
 
 const rule = gaussLegendre(16)
 const LARGEST_PANEL = 0.3
@@ -23,12 +20,12 @@ export function ages(history: ThermalHistory, temperaturesGeV: readonly number[]
     return point.stretch / hubbleOf(point.energy + late.matter(point) + late.darkEnergy(point))
   }
   const order = temperaturesGeV.map((_, i) => i).sort((i, j) => temperaturesGeV[j]! - temperaturesGeV[i]!)
-  const hottest = Math.max(START_GEV, temperaturesGeV[order[0]!] ?? 0)
+  const hottest = Math.max(history.expansion.ageStartsAt, temperaturesGeV[order[0]!] ?? 0)
   const cuts = [...history.breaks, LATE_GEV].map(Math.log).sort((a, b) => b - a)
 
   let from = Math.log(hottest)
   history.at(from, point)
-  let age = 2 / ((4 + (history.fluid?.index ?? 0)) * point.hubble)
+  let age = 2 / ((4 + history.expansion.earlyIndex) * point.hubble)
   const result = new Array<number>(temperaturesGeV.length).fill(0)
   for (const i of order) {
     const to = Math.log(temperaturesGeV[i]!)

@@ -22,6 +22,8 @@ export interface OdeStep {
   readonly end: Float64Array
   /** Component i of the solution at t within the step. */
   at(t: number, component: number): number
+  /** A copy of that polynomial to keep. */
+  polynomial(): (t: number, component: number) => number
 }
 
 export interface OdeCounters {

@@ -72,20 +72,14 @@ class Integration implements OdeStep {
   }
 
   at(t: number, component: number): number {
-    const { barycentric, c, stages } = this.tableau
+    return valueAt(this.tableau, this, t, component, this.problem.dimension)
+  }
+
+  polynomial(): (t: number, component: number) => number {
+    const { tableau } = this
     const n = this.problem.dimension
-    const z = (t - this.from) / (this.to - this.from)
-    if (z === 0) return this.start[component]!
-    let top = 0
-    let bottom = barycentric[0]! / z
-    for (let j = 0; j < stages; j++) {
-      const distance = z - c[j]!
-      if (distance === 0) return this.start[component]! + this.increments[j * n + component]!
-      const weight = barycentric[j + 1]! / distance
-      top += weight * this.increments[j * n + component]!
-      bottom += weight
-    }
-    return this.start[component]! + top / bottom
+    const kept = { from: this.from, to: this.to, start: this.start.slice(), increments: this.increments.slice() }
+    return (t, component) => valueAt(tableau, kept, t, component, n)
   }
 
   /** Guesses the increments of a step of length h by going on along the last polynomial. */
@@ -185,6 +179,29 @@ class Integration implements OdeStep {
     for (let i = 0; i < n; i++) this.end[i] = this.start[i]! + this.increments[lastStage + i]!
     this.counters.steps++
   }
+}
+
+/** The collocation polynomial of a step, by the barycentric formula. */
+function valueAt(
+  { barycentric, c, stages }: RadauTableau,
+  step: { from: number; to: number; start: Float64Array; increments: Float64Array },
+  t: number,
+  component: number,
+  n: number,
+): number {
+  const z = (t - step.from) / (step.to - step.from)
+  const start = step.start[component]!
+  if (z === 0) return start
+  let top = 0
+  let bottom = barycentric[0]! / z
+  for (let j = 0; j < stages; j++) {
+    const distance = z - c[j]!
+    if (distance === 0) return start + step.increments[j * n + component]!
+    const weight = barycentric[j + 1]! / distance
+    top += weight * step.increments[j * n + component]!
+    bottom += weight
+  }
+  return start + top / bottom
 }
 
 /** Solves the problem from t₀ to t₁ (either direction). */
