@@ -16,15 +16,20 @@ import { relicDensity } from './relicDensity.ts'
 import { emptySamples } from './yieldSamples.ts'
 import type { YieldSamples } from './yieldSamples.ts'
 
-/** The candidate as the equations see it. */
+/** The candidate as the equations see it. Coannihilating species share one equilibrium, and their pairs count both signs. */
 export function annihilatingState(history: ThermalHistory, candidate: FreezeOutInput): AnnihilatingState {
-  const { massGeV, degreesOfFreedom, selfConjugate } = candidate
-  const statistics = candidate.equilibriumStatistics === 'exact' ? candidate.statistics : 'maxwell-boltzmann'
+  const { annihilation, massGeV } = candidate
+  const others = annihilation.kind === 'coannihilation' ? annihilation.others : []
+  const boltzmann = candidate.equilibriumStatistics === 'maxwell-boltzmann'
   return new AnnihilatingState(history, {
     massGeV,
-    species: [{ massGeV, degreesOfFreedom, statistics }],
-    rate: annihilationRate(candidate.annihilation),
-    selfConjugate,
+    species: [candidate, ...others].map((species) => ({
+      massGeV: species.massGeV,
+      degreesOfFreedom: species.degreesOfFreedom,
+      statistics: boltzmann ? 'maxwell-boltzmann' : species.statistics,
+    })),
+    rate: annihilationRate(candidate),
+    selfConjugate: candidate.selfConjugate || annihilation.kind === 'coannihilation',
   })
 }
 

@@ -1,29 +1,6 @@
 import { z } from 'zod'
-import { degreesOfFreedom, massGeV, nonNegative, positive, quantumStatistics } from './numbers.ts'
-
-/** Largest ⟨σv⟩ taken, cm³/s: far above any unitarity limit, low enough that Γ/H stays a finite double. */
-const crossSection = nonNegative.max(1e-3)
-
-/** Thermally averaged annihilation cross-section ⟨σv⟩. */
-export const annihilationInput = z
-  .discriminatedUnion('kind', [
-    z
-      .strictObject({
-        kind: z.literal('partial-waves'),
-        sWaveCm3PerS: crossSection.describe('a in σv = a + b v², cm³/s'),
-        pWaveCm3PerS: crossSection.default(0).describe('b in σv = a + b v², cm³/s'),
-      })
-      .refine((rate) => rate.sWaveCm3PerS + rate.pWaveCm3PerS > 0, {
-        path: ['sWaveCm3PerS'],
-        message: 'allowed: a positive s-wave or p-wave part; with both zero nothing annihilates',
-      }),
-    z.strictObject({
-      kind: z.literal('power-law'),
-      coefficientCm3PerS: positive.max(1e-3).describe('σ₀ in ⟨σv⟩ = σ₀ x^-n, cm³/s'),
-      exponent: z.number().min(-0.75).max(10).describe('n in ⟨σv⟩ = σ₀ x^-n'),
-    }),
-  ])
-  .meta({ id: 'Annihilation' })
+import { annihilationInput } from './annihilation.ts'
+import { degreesOfFreedom, massGeV, positive, quantumStatistics } from './numbers.ts'
 
 const mass = massGeV.describe('Mass of the candidate, GeV')
 const equilibriumStatistics = z
@@ -88,5 +65,4 @@ export const candidateInput = z
 export type CandidateInput = z.output<typeof candidateInput>
 export type FreezeOutInput = z.output<typeof freezeOutInput>
 export type FreezeInDecayInput = z.output<typeof freezeInDecayInput>
-export type AnnihilationInput = FreezeOutInput['annihilation']
 export type Mechanism = CandidateInput['mechanism']

@@ -1,4 +1,5 @@
 /** Everything that crosses a boundary: zod schemas, their types, and how a bad input is reported. */
+export * from './annihilation.ts'
 export * from './candidate.ts'
 export * from './compute.ts'
 export * from './digest.ts'
