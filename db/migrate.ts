@@ -28,7 +28,9 @@ const startedAsProgram = /[\\/]migrate\.[jt]s$/.test(process.argv[1] ?? '')
 if (startedAsProgram) {
   const url = process.env['EMBERLINE_MIGRATION_URL']
   if (url === undefined || url === '') {
-    console.error('EMBERLINE_MIGRATION_URL is not set: give the address of the database, signing in as its owner')
+    console.error(
+      'EMBERLINE_MIGRATION_URL is not set: give the address of the database, signing in as its owner',
+    )
     process.exit(2)
   }
   await migrate(url)

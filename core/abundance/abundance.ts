@@ -1,11 +1,21 @@
-import type { ThermalHistory } from '../history/thermalHistory.ts'
+import { isMatterEra } from '../history/expansions/earlyMatter.ts'
 import { buildHistory } from '../history/thermalHistory.ts'
+import type { ThermalHistory } from '../history/thermalHistory.ts'
 import type { CandidateInput } from '../wire/candidate.ts'
 import { abundanceRequest } from '../wire/compute.ts'
 import type { AbundanceResult } from '../wire/compute.ts'
-import { parseInput } from '../wire/fault.ts'
-import { freezeInDecayAbundance } from './freezeInDecayCandidate.ts'
-import { freezeOutAbundance } from './freezeOutCandidate.ts'
+import { InputError, parseInput } from '../wire/fault.ts'
+import { ConvergenceError } from './convergence.ts'
+import { mechanismOf } from './mechanisms/mechanisms.ts'
+
+/** A maximum temperature below the reheating that follows a matter era contradicts it. */
+function refuseContradiction({ input }: ThermalHistory): void {
+  const { expansion, maximumTemperatureGeV } = input
+  if (expansion.kind !== 'early-matter' || maximumTemperatureGeV === null) return
+  if (maximumTemperatureGeV >= expansion.reheatTemperatureGeV) return
+  const message = `allowed: at least the reheating temperature of the matter era, ${expansion.reheatTemperatureGeV} GeV`
+  throw new InputError([{ path: 'history.maximumTemperatureGeV', value: maximumTemperatureGeV, message }])
+}
 
 /**
  * Present abundance of a candidate in a history.
@@ -13,12 +23,10 @@ import { freezeOutAbundance } from './freezeOutCandidate.ts'
  * @throws InputError when history and candidate do not go together
  */
 export function abundance(history: ThermalHistory, candidate: CandidateInput): AbundanceResult {
-  switch (candidate.mechanism) {
-    case 'freeze-out':
-      return freezeOutAbundance(history, candidate)
-    case 'freeze-in-decay':
-      return freezeInDecayAbundance(history, candidate)
-  }
+  refuseContradiction(history)
+  const result = mechanismOf(candidate).abundance(history, candidate)
+  if (!Number.isFinite(result.omegaH2)) throw new ConvergenceError('the abundance is not a finite number')
+  return isMatterEra(history.expansion) ? { ...result, dilution: history.expansion.dilution } : result
 }
 
 /** The same from the wire: parses, fills defaults in, solves. */

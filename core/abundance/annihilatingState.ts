@@ -5,7 +5,8 @@
  *
  * where Z = n a³/(s a³)_today, for n the sum of particle and antiparticle; one that is not its own antiparticle has half of
  * k. Z = Y = n/s wherever entropy is conserved from there on, and Z alone is continuous through an entropy release.
- * P is what a decaying matter field feeds in.
+ * P is what a decaying matter field feeds in. With a particle–antiparticle asymmetry η the same holds for the antiparticles
+ * alone, k Z² becoming k Z (Z + η) (Graesser, Shoemaker, Vecchi, JHEP 10 (2011) 110).
  * Source: Gondolo & Gelmini, Nucl. Phys. B 360 (1991) 145.
  */
 import { emptyExpansion } from '../history/expansionPoint.ts'
@@ -26,6 +27,8 @@ export interface AnnihilatingParticle {
   species: readonly EquilibriumSpecies[]
   rate: AnnihilationRate
   selfConjugate: boolean
+  /** η = Z₊ − Z₋; Z is then Z₋ alone. */
+  asymmetry?: number
 }
 
 /** The state at the x last asked for. */
@@ -38,6 +41,8 @@ export class AnnihilatingState {
   lnEquilibrium = 0
   lnDilution = 0
   production = 0
+  /** η. */
+  readonly asymmetry: number
   private readonly share: number
   private readonly rateBreaks: readonly number[]
   private readonly point = emptyExpansion()
@@ -48,6 +53,7 @@ export class AnnihilatingState {
     this.history = history
     this.particle = particle
     this.lnMass = Math.log(particle.massGeV)
+    this.asymmetry = particle.asymmetry ?? 0
     this.share = particle.selfConjugate ? 1 : 0.5
     this.rateBreaks = particle.rate.breaks.map((x) => this.lnMass - Math.log(x))
   }
@@ -81,11 +87,16 @@ export class AnnihilatingState {
     return panelEdges(this.history, this.lnMass - from, this.lnMass - to, widest, this.rateBreaks).map((lnT) => this.lnMass - lnT)
   }
 
+  /** ln T at ln x, kept inside the segment. */
+  clampedLnT(lnX: number): number {
+    return Math.max(Math.min(this.lnMass - lnX, this.hotEdge), this.coldEdge)
+  }
+
   /** Moves to ln x. */
   moveTo(lnX: number): void {
     const x = Math.exp(lnX)
     const { point, history, particle } = this
-    history.at(Math.max(Math.min(this.lnMass - lnX, this.hotEdge), this.coldEdge), point)
+    history.at(this.clampedLnT(lnX), point)
     this.lnDilution = point.lnDilution
     const dilution = point.lnDilution === 0 ? 1 : Math.exp(point.lnDilution)
     const perHubble = point.stretch / point.hubble

@@ -39,8 +39,8 @@ const LN_DEPARTURE = Math.log(2.5)
  */
 const LN_CERTAIN = Math.log(12)
 
-/** Z_eq/Z at which production is dropped: its square, 1e-12, is the relative error made. */
-const LN_NEGLIGIBLE = Math.log(1e-6)
+/** Gain over loss at which production is dropped: the relative error made. */
+const LN_NEGLIGIBLE = Math.log(1e-12)
 
 /** Z − Z_eq relative to Z_eq below which a yield that grew from nothing has arrived. */
 const ARRIVED = 1e-3
@@ -72,16 +72,17 @@ function lnYield(state: AnnihilatingState, lnX: number, lnZ: number): number {
   return lnZ + state.lnDilution
 }
 
-/** y = ln Z: y′ = (k Z_eq² + P)/Z − k Z. */
+/** y = ln Z: y′ = (k Z_eq² + P)/Z − k (Z + η). */
 function logarithmicProblem(state: AnnihilatingState): OdeProblem {
   return {
     dimension: 1,
     evaluate(lnX, y, slope, jacobian) {
       state.moveTo(lnX)
       const loss = state.strength * Math.exp(y[0]!)
+      const lossToMajority = state.strength * state.asymmetry
       let gain = state.strength * Math.exp(2 * state.lnEquilibrium - y[0]!)
       if (state.production > 0) gain += state.production * Math.exp(-y[0]!)
-      slope[0] = gain - loss
+      slope[0] = gain - loss - lossToMajority
       jacobian[0] = -gain - loss
     },
   }
@@ -99,10 +100,11 @@ function linearProblem(state: AnnihilatingState, unit: number): OdeProblem {
   }
 }
 
-/** ln(k Z_eq/x) − ln 12: positive where equilibrium is certain. */
+/** ln of k times the number of partners, over x and over 12: positive where equilibrium is certain. */
 function certainty(state: AnnihilatingState, lnX: number): number {
   state.moveTo(lnX)
-  return Math.log(state.strength) + state.lnEquilibrium - Math.max(lnX, 0) - LN_CERTAIN
+  const lnPartners = state.asymmetry === 0 ? state.lnEquilibrium : Math.log(Math.exp(steadyYield(state)) + state.asymmetry)
+  return Math.log(state.strength) + lnPartners - Math.max(lnX, 0) - LN_CERTAIN
 }
 
 /** The ln x after which equilibrium is not certain any more, looked for from the cold side so that it is the last one. */
@@ -123,16 +125,20 @@ function lastCertainty(state: AnnihilatingState, from: number): number {
 function followingYield(state: AnnihilatingState, lnX: number): number {
   const h = 1e-3
   state.moveTo(lnX + h)
-  const after = state.lnEquilibrium
+  const after = steadyYield(state)
   state.moveTo(lnX)
-  const lag = -(after - state.lnEquilibrium) / h / (2 * state.strength * Math.exp(state.lnEquilibrium))
-  return steadyYield(state) + Math.log1p(Math.max(0, Math.min(lag, 1)))
+  const now = steadyYield(state)
+  const lag = -(after - now) / h / (state.strength * (2 * Math.exp(now) + state.asymmetry))
+  return now + Math.log1p(Math.max(0, Math.min(lag, 1)))
 }
 
-/** ln Z at which gain and loss balance: equilibrium, unless something else produces the particle. */
+/** ln Z at which gain and loss balance: Z (Z + η) = Z_eq² + P/k. */
 function steadyYield(state: AnnihilatingState): number {
-  if (state.production === 0) return state.lnEquilibrium
-  return Math.log(Math.exp(2 * state.lnEquilibrium) + state.production / state.strength) / 2
+  const { asymmetry, production, strength, lnEquilibrium } = state
+  if (asymmetry === 0 && production === 0) return lnEquilibrium
+  const square = Math.exp(2 * lnEquilibrium) + production / strength
+  if (asymmetry > 0 && square < 1e-200) return 2 * lnEquilibrium - Math.log(asymmetry)
+  return Math.log(square / (Math.sqrt(square + (asymmetry / 2) ** 2) + asymmetry / 2))
 }
 
 function solveStretch(run: Run, problem: OdeProblem, y: number, to: number, options: OdeOptions): number {
@@ -174,7 +180,9 @@ function followStep(run: Run, step: OdeStep): Outcome {
     state.moveTo(step.to)
   }
   // Z_eq may still rise by what is left of the dilution, and no more.
-  if (state.productionOver && leadAtEnd > state.lnDilution - LN_NEGLIGIBLE) return 'production over'
+  const lnZ = step.end[0]!
+  const lnGainOverLoss = 2 * (state.lnEquilibrium + state.lnDilution) - lnZ - Math.log(Math.exp(lnZ) + state.asymmetry)
+  if (state.productionOver && lnGainOverLoss < LN_NEGLIGIBLE) return 'production over'
   return !run.watchesFreezeOut && Math.abs(leadAtEnd) < ARRIVED && certainty(state, step.to) > 0 ? 'in equilibrium' : 'go on'
 }
 
@@ -195,26 +203,33 @@ function whileProduced(run: Run): Outcome {
   return 'go on'
 }
 
-/** What annihilation still does without production: 1/Z grows by ∫ k d ln x. */
+/** Z after ∫ k d ln x without production: 1/Z grows by it; with an asymmetry, ln(1 + η/Z) grows by η times it. */
+function annihilated(z: number, asymmetry: number, integral: number): number {
+  return asymmetry === 0 ? 1 / (1 / z + integral) : asymmetry / Math.expm1(Math.log1p(asymmetry / z) + asymmetry * integral)
+}
+
+/** What annihilation still does without production. */
 function afterProduction(run: Run): void {
   const { state, effort } = run
   const strengthAt = (lnX: number): number => {
     state.moveTo(lnX)
     return state.strength
   }
-  let inverse = Math.exp(-run.lnZ)
+  const start = Math.exp(run.lnZ)
+  const lnZAfter = (integral: number): number => Math.log(annihilated(start, state.asymmetry, integral))
+  let integral = 0
   const edges = state.panelEdges(run.lnX, run.lnXToday, WIDEST_PANEL)
   for (let i = 0; i + 1 < edges.length; i++) {
     const [from, to] = [edges[i]!, edges[i + 1]!]
     state.stayWithin(from, to)
-    const start = inverse
-    const share = strengthAt(from) / inverse
+    const before = integral
+    const share = strengthAt(from) * (Math.exp(lnZAfter(before)) + state.asymmetry)
     const rule = panelRule(effort, share)
-    run.sampler.upTo(to, (lnX) => lnYield(state, lnX, -Math.log(start + integrateWith(rule, strengthAt, from, lnX))))
-    inverse += share < NOTHING_MORE ? 0 : integrateWith(rule, strengthAt, from, to)
+    run.sampler.upTo(to, (lnX) => lnYield(state, lnX, lnZAfter(before + integrateWith(rule, strengthAt, from, lnX))))
+    integral += share < NOTHING_MORE ? 0 : integrateWith(rule, strengthAt, from, to)
   }
   run.lnX = run.lnXToday
-  run.lnZ = -Math.log(inverse)
+  run.lnZ = lnZAfter(integral)
 }
 
 /** Puts the run where equilibrium is last certain, with the yield that follows it. */
@@ -225,7 +240,7 @@ function followEquilibrium(run: Run, from: number): void {
   run.sampler.upTo(last, (lnX) => lnYield(state, lnX, state.lnEquilibrium))
   run.lnX = last
   state.moveTo(last)
-  run.lnZ = last > from ? followingYield(state, last) : state.lnEquilibrium
+  run.lnZ = last > from ? followingYield(state, last) : steadyYield(state)
 }
 
 /**

@@ -1,8 +1,7 @@
 /** Curves of the Bench over its temperature window, hot to cold. */
 import { emptyPoint } from '../bath/bath.ts'
-import { freezeInDecayYields, widthOf } from '../abundance/freezeInDecayCandidate.ts'
-import { annihilatingState, freezeOutYields } from '../abundance/freezeOutCandidate.ts'
 import { logEquilibriumYield } from '../abundance/equilibrium.ts'
+import { mechanismOf } from '../abundance/mechanisms/mechanisms.ts'
 import { emptyExpansion } from '../history/expansionPoint.ts'
 import type { ThermalHistory } from '../history/thermalHistory.ts'
 import type { CandidateInput } from '../wire/candidate.ts'
@@ -34,65 +33,28 @@ const curve = (temperatureGeV: Float64Array, valueAt: (temperatureGeV: number) =
   value: temperatureGeV.map(valueAt),
 })
 
-/** The mass whose ratio to T is the candidate's x. */
-const scaleOf = (candidate: CandidateInput): number =>
-  candidate.mechanism === 'freeze-out' ? candidate.massGeV : candidate.parent.massGeV
-
-/** Y of the candidate; NaN above the maximum temperature. */
-export function yieldCurve(
-  history: ThermalHistory,
-  candidate: CandidateInput,
-  temperatureGeV: Float64Array,
-): Curve {
-  const lnX = temperatureGeV.map((temperature) => Math.log(scaleOf(candidate) / temperature))
-  const samples =
-    candidate.mechanism === 'freeze-out'
-      ? freezeOutYields(history, candidate, lnX)
-      : freezeInDecayYields(history, candidate, lnX)
-  return { temperatureGeV, value: samples.lnYield.map(Math.exp) }
+/** Y of the candidate; NaN where it does not exist yet. */
+export function yieldCurve(history: ThermalHistory, candidate: CandidateInput, temperatureGeV: Float64Array): Curve {
+  const mechanism = mechanismOf(candidate)
+  const scale = mechanism.scaleGeV(history, candidate)
+  const lnX = temperatureGeV.map((temperature) => Math.log(scale / temperature))
+  return { temperatureGeV, value: mechanism.yields(history, candidate, lnX).lnYield.map(Math.exp) }
 }
 
-/** Y_eq of the candidate in freeze-out, of the parent in freeze-in by decay. */
-export function equilibriumCurve(
-  history: ThermalHistory,
-  candidate: CandidateInput,
-  temperatureGeV: Float64Array,
-): Curve {
+/** Y_eq of the candidate, or of the parent it comes from. */
+export function equilibriumCurve(history: ThermalHistory, candidate: CandidateInput, temperatureGeV: Float64Array): Curve {
   const point = emptyExpansion()
-  const species =
-    candidate.mechanism === 'freeze-out'
-      ? {
-          ...candidate,
-          statistics:
-            candidate.equilibriumStatistics === 'exact'
-              ? candidate.statistics
-              : ('maxwell-boltzmann' as const),
-        }
-      : candidate.parent
+  const { species } = mechanismOf(candidate).equilibrium(candidate)
+  const mass = species[0]!.massGeV
   return curve(temperatureGeV, (temperature) => {
     history.at(Math.log(temperature), point)
-    return Math.exp(logEquilibriumYield([species], species.massGeV, species.massGeV / temperature, point.gS))
+    return Math.exp(logEquilibriumYield(species, mass, mass / temperature, point.gS))
   })
 }
 
-/** n_eq⟨σv⟩/H for freeze-out, Γ_B/H for freeze-in by decay. */
-export function rateOverHubbleCurve(
-  history: ThermalHistory,
-  candidate: CandidateInput,
-  temperatureGeV: Float64Array,
-): Curve {
-  if (candidate.mechanism === 'freeze-out') {
-    const state = annihilatingState(history, candidate)
-    return curve(temperatureGeV, (temperature) =>
-      state.rateOverHubble(Math.log(candidate.massGeV / temperature)),
-    )
-  }
-  const point = emptyExpansion()
-  const width = widthOf(candidate)
-  return curve(temperatureGeV, (temperature) => {
-    history.at(Math.log(temperature), point)
-    return width / point.hubble
-  })
+/** The rate that decides over H: n_eq⟨σv⟩/H, Γ_B/H, or production per candidate in equilibrium. */
+export function rateOverHubbleCurve(history: ThermalHistory, candidate: CandidateInput, temperatureGeV: Float64Array): Curve {
+  return curve(temperatureGeV, mechanismOf(candidate).rateOverHubble(history, candidate))
 }
 
 /** g_ρ of all radiation and g_s of the bath. */

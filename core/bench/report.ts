@@ -1,6 +1,7 @@
 /** Everything the Bench shows, in one answer. */
 import { abundance } from '../abundance/abundance.ts'
-import { guardsLookedAt } from '../abundance/guards.ts'
+import { guardsLookedAt } from '../abundance/guards/guard.ts'
+import { mechanismOf } from '../abundance/mechanisms/mechanisms.ts'
 import { ConvergenceError } from '../abundance/convergence.ts'
 import { ages } from '../history/time.ts'
 import { buildHistory } from '../history/thermalHistory.ts'
@@ -122,7 +123,7 @@ export function benchReport({
     guardsLookedAt: guardsLookedAt(candidate.mechanism),
     yieldCurve: yieldCurve(history, candidate, grid),
     equilibriumCurve: equilibriumCurve(history, candidate, grid),
-    equilibriumOf: candidate.mechanism === 'freeze-out' ? 'candidate' : 'parent',
+    equilibriumOf: mechanismOf(candidate).equilibrium(candidate).of,
     baselineYieldCurve: yieldCurve(baseline, candidate, grid),
     rateOverHubbleCurve: rateOverHubbleCurve(history, candidate, grid),
     gRhoCurve: numbers.gRho,

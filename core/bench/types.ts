@@ -36,6 +36,8 @@ export interface EpochMark {
     | 'electron-positron'
     | 'fluid-equality'
     | 'entropy-step'
+    | 'matter-begins'
+    | 'matter-ends'
     | 'maximum-temperature'
     | 'species-decoupling'
   label: string

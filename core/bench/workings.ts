@@ -13,9 +13,24 @@ const EQUATION: Record<CandidateInput['mechanism'], Pick<Working, 'formula' | 's
     source: 'Gondolo & Gelmini, Nucl. Phys. B 360 (1991) 145',
   },
   'freeze-in-decay': {
-    formula:
-      'dY/d ln x = n_X g_B m_B² T Γ/(2π²) · Σ_k (−η)^(k+1) K₁(k m_B/T)/k · (1 + δ_s)/(sH), from nothing',
+    formula: 'dY/d ln x = n_X g_B m_B² T Γ/(2π²) · Σ_k (−η)^(k+1) K₁(k m_B/T)/k · (1 + δ_s)/(sH), from nothing',
     source: 'Hall, Jedamzik, March-Russell, West, JHEP 03 (2010) 080',
+  },
+  'freeze-in-scattering': {
+    formula: 'dY/d ln x = γ(T)(1 + δ_s)/(sH), γ = g₁g₂T/(32π⁴) ∫ σ [s−(m₁+m₂)²][s−(m₁−m₂)²] K₁(√s/T)/√s ds, from nothing',
+    source: 'Gondolo & Gelmini, Nucl. Phys. B 360 (1991) 145; Edsjö & Gondolo, Phys. Rev. D 56 (1997) 1879',
+  },
+  'freeze-in-ultraviolet': {
+    formula: 'dY/d ln(1/T) = C T^(2q+4)/Λ^(2q) · (1 + δ_s)/(sH), from the maximum temperature down',
+    source: 'Elahi, Kolda, Unwin, JHEP 03 (2015) 048',
+  },
+  asymmetric: {
+    formula: 'dY₋/d ln x = −(s⟨σv⟩/H)(1 + δ_s)(Y₊Y₋ − Y_eq²), Y₊ − Y₋ = η_X; Y = Y₊ + Y₋',
+    source: 'Graesser, Shoemaker, Vecchi, JHEP 10 (2011) 110',
+  },
+  'hot-relic': {
+    formula: 'Y_eq(T_d) = n_eq(T_d)/s(T_d), over what entropy releases dilute it by',
+    source: 'Kolb & Turner, The Early Universe (1990), §5.2',
   },
 }
 

@@ -22,6 +22,18 @@ export const guard = z
   .meta({ id: 'Guard' })
 export type Guard = z.output<typeof guard>
 
+/** The parent's own freeze-out, as if it were stable. */
+const parentFreezeOut = z.object({
+  yieldToday: z.number(),
+  omegaH2IfStable: z.number(),
+  freezeOutX: z.number().optional(),
+  freezeOutTemperatureGeV: z.number().optional(),
+  sigmaVAtFreezeOutCm3PerS: z.number().optional(),
+  rateOverHubbleAtFreezeOut: z.number().optional(),
+  rateEqualsHubbleTemperatureGeV: z.number().optional(),
+  widthOverHubble: z.number().optional().describe('Γ/H at x_f'),
+})
+
 export const abundanceResult = z
   .object({
     omegaH2: z.number().describe('Ω_χ h²'),
@@ -37,7 +49,13 @@ export const abundanceResult = z
       .number()
       .optional()
       .describe('T where n_eq⟨σv⟩ = H, the last time, GeV'),
-    yieldFreezeIn: z.number().optional(),
+    yieldFreezeIn: z.number().optional().describe('From the parent in equilibrium, or from collisions'),
+    yieldLateDecay: z.number().optional().describe('perDecay times the yield of the parent were it stable'),
+    parentFreezeOut: parentFreezeOut.optional(),
+    decayTimeS: z.number().optional().describe('Age when half of the parents have decayed, s'),
+    yieldParticle: z.number().optional(),
+    yieldAntiparticle: z.number().optional(),
+    dilution: z.number().optional().describe('Growth of s a³ in an era of matter'),
     lifetimeS: z.number().optional(),
     widthGeV: z.number().optional(),
     productionTemperatureGeV: z.number().optional().describe('T where dY/dln T is largest, GeV'),

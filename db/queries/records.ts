@@ -1,4 +1,4 @@
-import { and, desc, eq } from 'drizzle-orm'
+import { and, desc, eq, sql } from 'drizzle-orm'
 import type { GroupTransaction } from '../database.ts'
 import type { RecordTable } from '../schema/recordTable.ts'
 import type { RevisionTable } from '../schema/revisionTable.ts'
@@ -113,16 +113,21 @@ export function recordQueries<Input>(tables: RecordTables) {
       return row === undefined ? null : { ...row, input: row.input as Input }
     },
 
-    /** Makes a record with its first revision and returns its id. */
-    async create(tx: GroupTransaction, name: string, first: RevisionDraft<Input>): Promise<string> {
+    /** Makes a record with its first revision. */
+    async create(
+      tx: GroupTransaction,
+      name: string,
+      first: RevisionDraft<Input>,
+    ): Promise<{ recordId: string; revisionId: string }> {
       const { groupId, createdAt } = first
       const [record] = await tx
         .insert(records)
         .values({ groupId, name, latestNumber: 1, createdAt, updatedAt: createdAt })
         .returning({ id: records.id })
       if (record === undefined) throw new Error('an insert that raised nothing returned nothing')
-      await insertRevision(tables, tx, { recordId: record.id, number: 1, parentId: null }, first)
-      return record.id
+      const recordId = record.id
+      const revisionId = await insertRevision(tables, tx, { recordId, number: 1, parentId: null }, first)
+      return { recordId, revisionId }
     },
 
     /**
@@ -151,7 +156,7 @@ export function recordQueries<Input>(tables: RecordTables) {
       const revisionId = await insertRevision(tables, tx, { recordId, number, parentId }, draft)
       await tx
         .update(records)
-        .set({ latestNumber: number, updatedAt: draft.createdAt ?? new Date() })
+        .set({ latestNumber: number, updatedAt: draft.createdAt ?? sql`now()` })
         .where(eq(records.id, recordId))
       return { outcome: 'appended', revisionId }
     },

@@ -25,7 +25,7 @@ export function revisionTable(noun: string, records: RecordTable) {
       input: jsonb('input').notNull(),
     },
     (t) => [
-      unique(`${table}_number_unique`).on(t.recordId, t.number),
+      unique(`${table}_number_unique`).on(t.groupId, t.recordId, t.number),
       unique(`${table}_group_id_unique`).on(t.groupId, t.id),
       unique(`${table}_record_id_unique`).on(t.groupId, t.recordId, t.id),
       foreignKey({

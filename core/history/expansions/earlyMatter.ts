@@ -35,6 +35,8 @@ export interface MatterEra extends Expansion {
   matterFraction(lnT: number): number
 }
 
+export const isMatterEra = (expansion: Expansion): expansion is MatterEra => 'dilution' in expansion
+
 /** Allowed error of ln(ρ_φ a³) and ln(s a³) in each step. */
 const TOLERANCE = 1e-10
 

@@ -1,0 +1,18 @@
+import type { PublicInfo } from '#core/wire/index'
+import type { Database } from '#db/database'
+import type { Logger } from 'pino'
+import type { SignInLimits } from './middleware/signInLimit.ts'
+
+/** What the server is built from; tests give their own. */
+export interface AppDependencies {
+  /** Signed in as the server's own role. */
+  db: Database
+  logger: Logger
+  sessionSecret: string
+  /** The address people type, when a proxy stands in front; null for the address listened on. */
+  publicUrl: URL | null
+  webRoot: string
+  /** The sign-ins to offer on the sign-in page; null outside demo mode. */
+  demoSignIns: PublicInfo['demoSignIns'] | null
+  signInLimits: SignInLimits
+}

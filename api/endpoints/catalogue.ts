@@ -1,0 +1,22 @@
+import { computeAbundanceEndpoint, computeHistoryEndpoint } from './compute.ts'
+import type { Endpoint } from './endpoint.ts'
+import { createEvaluationEndpoint, listEvaluationsEndpoint, readEvaluationEndpoint } from './evaluations.ts'
+import { healthEndpoint, infoEndpoint } from './info.ts'
+import { candidateEndpoints, historyEndpoints } from './records.ts'
+import { signInEndpoint, signOutEndpoint, whoAmIEndpoint } from './session.ts'
+
+/** Every endpoint, in the order of the API document. */
+export const CATALOGUE: readonly Endpoint[] = [
+  healthEndpoint,
+  infoEndpoint,
+  signInEndpoint,
+  whoAmIEndpoint,
+  signOutEndpoint,
+  ...Object.values(historyEndpoints),
+  ...Object.values(candidateEndpoints),
+  listEvaluationsEndpoint,
+  readEvaluationEndpoint,
+  createEvaluationEndpoint,
+  computeHistoryEndpoint,
+  computeAbundanceEndpoint,
+]

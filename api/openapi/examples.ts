@@ -1,0 +1,132 @@
+import { CORE_VERSION, computeAbundance, computeHistory } from '#core/index'
+import { abundanceRequest, digestOf, parseInput } from '#core/wire/index'
+import type { CandidateInput, HistoryInput } from '#core/wire/index'
+
+/** What the API document shows for an endpoint. Numbers are computed by the core, so that they cannot go stale. */
+export interface EndpointExample {
+  body?: unknown
+  answer?: unknown
+}
+
+const IDS = {
+  user: '5f2b8c1e-7a64-4d0b-9a53-0c7d6c1f2a10',
+  group: '0b9e4f6a-2c3d-4e8f-8b71-6d5a4c3b2a1f',
+  history: 'a3d1c5e7-9b2f-4c6d-8e0a-1f3b5d7c9e2a',
+  historyRevision: 'c4e6a8b0-1d3f-4527-9c8e-7a6b5c4d3e2f',
+  candidate: 'd5f7b9c1-2e40-4638-8d9f-8b7c6d5e4f30',
+  candidateRevision: 'e608cad2-3f51-4749-9ea0-9c8d7e6f5041',
+  nextRevision: '08a1b2c3-4d5e-4f60-8a7b-9c8d7e6f5a4b',
+  evaluation: 'f719dbe3-4062-485a-8fb1-ad9e8f706152',
+}
+const AT = '2026-10-01T09:20:00.000Z'
+
+const person = { id: IDS.user, name: 'Mateo Adeyemi' }
+const historyWritten = { bath: { treatment: 'fit-2018', band: 0 } }
+const candidateWritten = {
+  mechanism: 'freeze-out',
+  massGeV: 100,
+  degreesOfFreedom: 2,
+  statistics: 'fermion',
+  annihilation: { kind: 'partial-waves', sWaveCm3PerS: 2.2e-26 },
+}
+
+const session = {
+  user: { ...person, email: 'mateo@larchvalley.example' },
+  group: { id: IDS.group, name: 'Larch Valley group', baselineRevisionId: IDS.historyRevision },
+  role: 'author',
+  expiresAt: '2026-10-15T09:20:00.000Z',
+}
+
+function recordExamples(
+  noun: string,
+  name: string,
+  id: string,
+  revisionId: string,
+  written: unknown,
+  input: unknown,
+) {
+  const capital = noun.charAt(0).toUpperCase() + noun.slice(1)
+  const head = {
+    id: revisionId,
+    number: 1,
+    parentId: null,
+    author: person,
+    createdAt: AT,
+    note: 'First guess',
+    digest: digestOf(input),
+    input,
+  }
+  const summary = { id, name, createdAt: AT, updatedAt: AT, revisionCount: 1, head }
+  const revised = { ...head, id: IDS.nextRevision, number: 2, parentId: revisionId, note: 'After Thursday' }
+  return {
+    [`list${capital}Records`]: { answer: { items: [summary], next: null } },
+    [`read${capital}`]: { answer: { ...summary, revisions: [head] } },
+    [`create${capital}`]: {
+      body: { name, note: head.note, input: written },
+      answer: { ...summary, revisions: [head] },
+    },
+    [`revise${capital}`]: {
+      body: { parentId: revisionId, note: revised.note, input: written },
+      answer: { ...summary, revisionCount: 2, head: revised, revisions: [revised, head] },
+    },
+  }
+}
+
+function evaluationExamples(
+  history: HistoryInput,
+  candidate: CandidateInput,
+): Record<string, EndpointExample> {
+  const result = computeAbundance({ history, candidate })
+  const evaluation = {
+    id: IDS.evaluation,
+    history: { id: IDS.historyRevision, number: 1, recordId: IDS.history, name: 'The 2018 fit' },
+    candidate: { id: IDS.candidateRevision, number: 1, recordId: IDS.candidate, name: 'Standard WIMP' },
+    author: person,
+    createdAt: AT,
+    coreVersion: CORE_VERSION,
+    inputDigest: digestOf({ history, candidate }),
+    result,
+  }
+  return {
+    listEvaluations: { answer: { items: [evaluation], next: null } },
+    readEvaluation: { answer: evaluation },
+    createEvaluation: {
+      body: {
+        historyRevisionId: IDS.historyRevision,
+        candidateRevisionId: IDS.candidateRevision,
+        shownOmegaH2: result.omegaH2,
+      },
+      answer: {
+        evaluation,
+        shown: { relativeDifference: 0, allowed: Math.max(1e-9, result.numericalError), agrees: true },
+      },
+    },
+    computeAbundance: { body: { history: historyWritten, candidate: candidateWritten }, answer: result },
+  }
+}
+
+/** Examples by the id of their endpoint. */
+export function examples(): Record<string, EndpointExample> {
+  const { history, candidate } = parseInput(abundanceRequest, {
+    history: historyWritten,
+    candidate: candidateWritten,
+  })
+  const rowsAsked = { history: historyWritten, temperaturesGeV: [100, 1, 0.15, 0.001] }
+  return {
+    health: { answer: { status: 'ok' } },
+    info: { answer: { coreVersion: CORE_VERSION, demo: false, demoSignIns: [] } },
+    signIn: { body: { email: session.user.email, password: 'three or four words' }, answer: session },
+    whoAmI: { answer: session },
+    ...recordExamples('history', 'The 2018 fit', IDS.history, IDS.historyRevision, historyWritten, history),
+    ...recordExamples(
+      'candidate',
+      'Standard WIMP',
+      IDS.candidate,
+      IDS.candidateRevision,
+      candidateWritten,
+      candidate,
+    ),
+    ...evaluationExamples(history, candidate),
+    computeHistory: { body: rowsAsked, answer: computeHistory(rowsAsked) },
+  }
+}

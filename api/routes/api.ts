@@ -1,0 +1,47 @@
+import cookieParser from 'cookie-parser'
+import express from 'express'
+import type { Router } from 'express'
+import type { AppDependencies } from '../dependencies.ts'
+import { notFound } from '../errors/problemError.ts'
+import { sameOrigin } from '../middleware/sameOrigin.ts'
+import { findSession } from '../middleware/session.ts'
+import { sessionCookie } from '../middleware/sessionCookie.ts'
+import { signInLimit } from '../middleware/signInLimit.ts'
+import { apiDocument } from '../openapi/document.ts'
+import { evaluationService } from '../services/evaluations.ts'
+import { candidateService, historyService } from '../services/records.ts'
+import { sessionService } from '../services/sessions.ts'
+import { sessionTokens } from '../services/token.ts'
+import { candidateRoutes } from './candidates.ts'
+import { computeRoutes } from './compute.ts'
+import { evaluationRoutes } from './evaluations.ts'
+import { historyRoutes } from './histories.ts'
+import { infoRoutes } from './info.ts'
+import { sessionRoutes } from './session.ts'
+
+/** Everything below /api. */
+export function apiRoutes(dependencies: AppDependencies): Router {
+  const { db, publicUrl, sessionSecret, demoSignIns, signInLimits } = dependencies
+  const cookie = sessionCookie(publicUrl?.protocol === 'https:')
+  const sessions = sessionService(db, sessionTokens(sessionSecret))
+
+  const v1 = express.Router()
+  v1.use(cookieParser(), findSession(cookie, sessions.find))
+  infoRoutes(v1, db, demoSignIns)
+  sessionRoutes(v1, sessions, cookie, signInLimit(signInLimits))
+  historyRoutes(v1, historyService(db))
+  candidateRoutes(v1, candidateService(db))
+  evaluationRoutes(v1, evaluationService(db))
+  computeRoutes(v1)
+
+  const api = express.Router()
+  api.use((_req, res, next) => {
+    res.setHeader('cache-control', 'no-store')
+    next()
+  })
+  api.use(sameOrigin(publicUrl?.origin ?? null))
+  api.get('/openapi.json', (_req, res) => void res.json(apiDocument()))
+  api.use('/v1', v1)
+  api.use((_req, _res, next) => next(notFound('endpoint')))
+  return api
+}

@@ -1,0 +1,86 @@
+import { CORE_VERSION, computeAbundance } from '#core/index'
+import { digestOf } from '#core/wire/index'
+import type { AbundanceResult, CreateEvaluationResult, Evaluation } from '#core/wire/index'
+import { withGroup } from '#db/database'
+import type { Database } from '#db/database'
+import { candidateQueries } from '#db/queries/candidates'
+import { findEvaluation, insertEvaluation, listEvaluations } from '#db/queries/evaluations'
+import type { EvaluationFilter, StoredEvaluation } from '#db/queries/evaluations'
+import { historyQueries } from '#db/queries/histories'
+import type { LiveSession } from '#db/queries/sessions'
+import { notFound } from '../errors/problemError.ts'
+import { pageAnswer, pageRequest } from './cursor.ts'
+
+/** Two machines may round differently below this, relative, however exact the method claims to be. */
+const LEAST_ALLOWED_DIFFERENCE = 1e-9
+
+const writeEvaluation = (stored: StoredEvaluation): Evaluation => ({
+  ...stored,
+  createdAt: stored.createdAt.toISOString(),
+})
+
+/** How far what the browser showed lies from what the server computed; null when it showed nothing. */
+export function compareShown(
+  shownOmegaH2: number | undefined,
+  { omegaH2, numericalError }: AbundanceResult,
+): CreateEvaluationResult['shown'] {
+  if (shownOmegaH2 === undefined) return null
+  const relativeDifference = Math.abs(shownOmegaH2 - omegaH2) / omegaH2
+  const allowed = Math.max(LEAST_ALLOWED_DIFFERENCE, numericalError)
+  return { relativeDifference, allowed, agrees: relativeDifference <= allowed }
+}
+
+interface EvaluationRequest {
+  historyRevisionId: string
+  candidateRevisionId: string
+  shownOmegaH2?: number | undefined
+}
+
+type ListRequest = EvaluationFilter & { limit: number; cursor?: string | undefined }
+
+export function evaluationService(db: Database) {
+  const revisionsOf = (session: LiveSession, request: EvaluationRequest) =>
+    withGroup(db, session.group.id, async (tx) => {
+      const history = await historyQueries.findRevision(tx, request.historyRevisionId)
+      if (history === null) throw notFound('history revision')
+      const candidate = await candidateQueries.findRevision(tx, request.candidateRevisionId)
+      if (candidate === null) throw notFound('candidate revision')
+      return { history, candidate }
+    })
+
+  const read = (session: LiveSession, id: string): Promise<Evaluation> =>
+    withGroup(db, session.group.id, async (tx) => {
+      const stored = await findEvaluation(tx, id)
+      if (stored === null) throw notFound('evaluation')
+      return writeEvaluation(stored)
+    })
+
+  return {
+    read,
+
+    async list(session: LiveSession, query: ListRequest) {
+      const request = pageRequest(query)
+      const page = await withGroup(db, session.group.id, (tx) => listEvaluations(tx, query, request))
+      return pageAnswer(page, writeEvaluation)
+    },
+
+    /** Computes between two transactions: revisions never change, and no connection waits for the solver. */
+    async create(session: LiveSession, request: EvaluationRequest): Promise<CreateEvaluationResult> {
+      const { history, candidate } = await revisionsOf(session, request)
+      const input = { history: history.input, candidate: candidate.input }
+      const result = computeAbundance(input)
+      const id = await withGroup(db, session.group.id, (tx) =>
+        insertEvaluation(tx, {
+          groupId: session.group.id,
+          authorId: session.user.id,
+          history,
+          candidate,
+          coreVersion: CORE_VERSION,
+          inputDigest: digestOf(input),
+          result,
+        }),
+      )
+      return { evaluation: await read(session, id), shown: compareShown(request.shownOmegaH2, result) }
+    },
+  }
+}

@@ -1,0 +1,94 @@
+import { digestOf } from '#core/wire/index'
+import type { CandidateInput, HistoryInput } from '#core/wire/index'
+import { withGroup } from '#db/database'
+import type { Database, GroupTransaction } from '#db/database'
+import { candidateQueries } from '#db/queries/candidates'
+import { historyQueries } from '#db/queries/histories'
+import type { RecordQueries } from '#db/queries/records'
+import type { LiveSession } from '#db/queries/sessions'
+import type { RevisionDraft, StoredRecord, StoredRevision, StoredSummary } from '#db/queries/storedRecord'
+import { ProblemError, notFound } from '../errors/problemError.ts'
+import { pageAnswer, pageRequest } from './cursor.ts'
+
+const writeRevision = <Input>(revision: StoredRevision<Input>) => ({
+  ...revision,
+  createdAt: revision.createdAt.toISOString(),
+})
+
+const writeSummary = <Input>({
+  id,
+  name,
+  createdAt,
+  updatedAt,
+  revisionCount,
+  head,
+}: StoredSummary<Input>) => ({
+  id,
+  name,
+  createdAt: createdAt.toISOString(),
+  updatedAt: updatedAt.toISOString(),
+  revisionCount,
+  head: writeRevision(head),
+})
+
+const writeRecord = <Input>(record: StoredRecord<Input>) => ({
+  ...writeSummary(record),
+  revisions: record.revisions.map((revision) => writeRevision(revision)),
+})
+
+interface Content<Input> {
+  note: string
+  input: Input
+}
+
+/** Histories and candidates differ in their input alone: this is what a group does with either. */
+function recordService<Input>(db: Database, noun: string, queries: RecordQueries<Input>) {
+  const draftOf = (session: LiveSession, { note, input }: Content<Input>): RevisionDraft<Input> => ({
+    groupId: session.group.id,
+    authorId: session.user.id,
+    note,
+    digest: digestOf(input),
+    input,
+  })
+
+  const readIn = async (tx: GroupTransaction, id: string) => {
+    const record = await queries.find(tx, id)
+    if (record === null) throw notFound(noun)
+    return writeRecord(record)
+  }
+
+  return {
+    async list(session: LiveSession, query: { limit: number; cursor?: string | undefined }) {
+      const request = pageRequest(query)
+      const page = await withGroup(db, session.group.id, (tx) => queries.list(tx, request))
+      return pageAnswer(page, (row) => writeSummary(row))
+    },
+
+    read: (session: LiveSession, id: string) => withGroup(db, session.group.id, (tx) => readIn(tx, id)),
+
+    create: (session: LiveSession, request: Content<Input> & { name: string }) =>
+      withGroup(db, session.group.id, async (tx) => {
+        const { recordId } = await queries.create(tx, request.name, draftOf(session, request))
+        return readIn(tx, recordId)
+      }),
+
+    revise: (session: LiveSession, id: string, request: Content<Input> & { parentId: string }) =>
+      withGroup(db, session.group.id, async (tx) => {
+        const appended = await queries.append(tx, id, request.parentId, draftOf(session, request))
+        if (appended.outcome === 'no-such-record') throw notFound(noun)
+        if (appended.outcome === 'stale-parent') throw staleParent(noun, appended.newest)
+        return readIn(tx, id)
+      }),
+  }
+}
+
+function staleParent(noun: string, newest: { id: string; number: number }): ProblemError {
+  return new ProblemError(
+    'stale-parent',
+    `Revision ${newest.number} (${newest.id}) is now the newest of this ${noun}. Nothing was saved and what you typed is still yours: look at that revision, then save on top of it.`,
+  )
+}
+
+export const historyService = (db: Database) => recordService<HistoryInput>(db, 'history', historyQueries)
+export const candidateService = (db: Database) =>
+  recordService<CandidateInput>(db, 'candidate', candidateQueries)
