@@ -1,0 +1,45 @@
+import { createBrowserRouter, redirect } from 'react-router-dom'
+import type { LoaderFunctionArgs, RouteObject } from 'react-router-dom'
+import { sessionQuery } from '../api/session.ts'
+import { Loading } from './Loading.tsx'
+import { NotFoundPage } from './NotFoundPage.tsx'
+import { PageError } from './PageError.tsx'
+import { queryClient } from './queryClient.ts'
+import { Shell } from './Shell.tsx'
+
+/** Pages behind the sign-in send a stranger there, and back to where they wanted to go. */
+async function signedIn({ request }: LoaderFunctionArgs) {
+  const session = await queryClient.ensureQueryData(sessionQuery)
+  if (session) return null
+  const { pathname, search } = new URL(request.url)
+  return redirect(`/sign-in?to=${encodeURIComponent(pathname + search)}`)
+}
+
+type PageModule = { default: React.ComponentType }
+const page = (path: string, load: () => Promise<PageModule>): RouteObject => ({
+  path,
+  lazy: async () => ({ Component: (await load()).default }),
+  ErrorBoundary: PageError,
+})
+
+export const router = createBrowserRouter([
+  { ...page('/sign-in', () => import('../features/session/SignInPage.tsx')), HydrateFallback: Loading },
+  {
+    path: '/',
+    Component: Shell,
+    loader: signedIn,
+    HydrateFallback: Loading,
+    ErrorBoundary: PageError,
+    children: [
+      { index: true, loader: () => redirect('/bench') },
+      page('bench', () => import('../features/bench/BenchPage.tsx')),
+      page('histories', () => import('../features/records/HistoriesPage.tsx')),
+      page('histories/:id', () => import('../features/records/HistoryPage.tsx')),
+      page('candidates', () => import('../features/records/CandidatesPage.tsx')),
+      page('candidates/:id', () => import('../features/records/CandidatePage.tsx')),
+      page('evaluations', () => import('../features/evaluations/EvaluationsPage.tsx')),
+      page('evaluations/:id', () => import('../features/evaluations/EvaluationPage.tsx')),
+      { path: '*', Component: NotFoundPage },
+    ],
+  },
+])
