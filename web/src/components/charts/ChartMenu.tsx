@@ -1,0 +1,43 @@
+import type { RefObject } from 'react'
+import type { Series } from './LineChart.tsx'
+import { saveCsv, savePng, saveSvg } from './exportChart.ts'
+
+interface ChartMenuProps {
+  title: string
+  svg: RefObject<SVGSVGElement | null>
+  series: readonly Series[]
+  tableShown: boolean
+  onTable: () => void
+}
+
+/** What can be taken from a chart. */
+export function ChartMenu({ title, svg, series, tableShown, onTable }: ChartMenuProps) {
+  const withDrawing = (use: (svg: SVGSVGElement) => void) => () => {
+    if (svg.current) use(svg.current)
+  }
+  const action = 'px-1 py-0.5 hover:text-ember'
+  return (
+    <span
+      className="flex gap-1.5 text-caption text-soft"
+      role="group"
+      aria-label={`${title}: data and files`}
+    >
+      <button type="button" className={action} aria-pressed={tableShown} onClick={onTable}>
+        data
+      </button>
+      <button type="button" className={action} onClick={() => saveCsv(series, title)}>
+        CSV
+      </button>
+      <button type="button" className={action} onClick={withDrawing((drawing) => saveSvg(drawing, title))}>
+        SVG
+      </button>
+      <button
+        type="button"
+        className={action}
+        onClick={withDrawing((drawing) => void savePng(drawing, title))}
+      >
+        PNG
+      </button>
+    </span>
+  )
+}

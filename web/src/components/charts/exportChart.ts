@@ -1,0 +1,84 @@
+/** A chart as a file: the drawing with its colours written in, the picture, the numbers. */
+import { valueAtTemperature } from './curvePath.ts'
+import type { Series } from './LineChart.tsx'
+
+function save(blob: Blob, name: string): void {
+  const link = document.createElement('a')
+  link.href = URL.createObjectURL(blob)
+  link.download = name
+  link.click()
+  setTimeout(() => URL.revokeObjectURL(link.href), 10_000)
+}
+
+const fileName = (title: string, ending: string): string =>
+  `${title
+    .toLowerCase()
+    .replace(/[^a-z0-9]+/g, '-')
+    .replace(/^-|-$/g, '')}.${ending}`
+
+const DRAWN = [
+  'fill',
+  'stroke',
+  'stroke-width',
+  'stroke-dasharray',
+  'opacity',
+  'font-family',
+  'font-size',
+  'font-weight',
+  'font-style',
+  'text-anchor',
+] as const
+
+/** The drawing with every style it inherits from the page written into it. */
+function standalone(svg: SVGSVGElement): string {
+  const copy = svg.cloneNode(true) as SVGSVGElement
+  const originals = [svg, ...svg.querySelectorAll<SVGElement>('*')]
+  const copies = [copy, ...copy.querySelectorAll<SVGElement>('*')]
+  originals.forEach((original, i) => {
+    const style = getComputedStyle(original)
+    for (const property of DRAWN) copies[i]!.style.setProperty(property, style.getPropertyValue(property))
+  })
+  copy.setAttribute('xmlns', 'http://www.w3.org/2000/svg')
+  copy.style.setProperty('background', getComputedStyle(document.documentElement).backgroundColor)
+  return new XMLSerializer().serializeToString(copy)
+}
+
+export function saveSvg(svg: SVGSVGElement, title: string): void {
+  save(new Blob([standalone(svg)], { type: 'image/svg+xml' }), fileName(title, 'svg'))
+}
+
+const PNG_SCALE = 2
+
+export async function savePng(svg: SVGSVGElement, title: string): Promise<void> {
+  const image = new Image()
+  image.src = `data:image/svg+xml;charset=utf-8,${encodeURIComponent(standalone(svg))}`
+  await image.decode()
+  const canvas = document.createElement('canvas')
+  canvas.width = svg.clientWidth * PNG_SCALE
+  canvas.height = svg.clientHeight * PNG_SCALE
+  const context = canvas.getContext('2d')
+  if (!context) return
+  context.fillStyle = getComputedStyle(document.documentElement).backgroundColor
+  context.fillRect(0, 0, canvas.width, canvas.height)
+  context.drawImage(image, 0, 0, canvas.width, canvas.height)
+  canvas.toBlob((blob) => {
+    if (blob) save(blob, fileName(title, 'png'))
+  })
+}
+
+/** Rows of the shown curves at the temperatures of the first: RFC 4180. */
+export function csvText(series: readonly Series[]): string {
+  const header = ['temperatureGeV', ...series.map((each) => each.id)].join(',')
+  const grid = series[0]?.curve.temperatureGeV ?? new Float64Array()
+  const rows = [...grid].map((temperature, i) =>
+    [
+      temperature,
+      ...series.map((each) => each.curve.value[i] ?? valueAtTemperature(each.curve, temperature)),
+    ].join(','),
+  )
+  return [header, ...rows].join('\r\n') + '\r\n'
+}
+
+export function saveCsv(series: readonly Series[], title: string): void {
+  save(new Blob([csvText(series)], { type: 'text/csv' }), fileName(title, 'csv'))
+}

@@ -1,0 +1,56 @@
+/** Axes as plain functions: geometry first, drawing after. */
+export interface AxisScale {
+  kind: 'log' | 'linear'
+  domain: readonly [number, number]
+  range: readonly [number, number]
+}
+
+/** Position of a value; NaN for what a logarithm does not know. */
+export function position({ kind, domain, range }: AxisScale, value: number): number {
+  const [from, to] = kind === 'log' ? [Math.log(domain[0]), Math.log(domain[1])] : domain
+  const at = kind === 'log' ? Math.log(value) : value
+  return range[0] + ((at - from) / (to - from)) * (range[1] - range[0])
+}
+
+/** The value at a position. */
+export function valueAt({ kind, domain, range }: AxisScale, at: number): number {
+  const share = (at - range[0]) / (range[1] - range[0])
+  if (kind === 'linear') return domain[0] + share * (domain[1] - domain[0])
+  return Math.exp(Math.log(domain[0]) + share * Math.log(domain[1] / domain[0]))
+}
+
+export interface Tick {
+  value: number
+  /** Minor ticks carry no label. */
+  major: boolean
+}
+
+/** Powers of ten inside a domain, thinned to at most `most`; between them the digits 2 to 9 when they are few. */
+export function logTicks(domain: readonly [number, number], most: number): Tick[] {
+  const low = Math.min(...domain)
+  const high = Math.max(...domain)
+  const first = Math.ceil(Math.log10(low) - 1e-9)
+  const last = Math.floor(Math.log10(high) + 1e-9)
+  const every = Math.max(1, Math.ceil((last - first + 1) / Math.max(1, most)))
+  const ticks: Tick[] = []
+  for (let power = first - 1; power <= last; power++) {
+    const value = Number(`1e${power}`)
+    if (power >= first) ticks.push({ value, major: power % every === 0 })
+    if (every > 1) continue
+    for (let digit = 2; digit <= 9; digit++)
+      if (digit * value > low && digit * value < high) ticks.push({ value: digit * value, major: false })
+  }
+  return ticks
+}
+
+/** Round values inside a domain, about `wanted` of them. */
+export function linearTicks(domain: readonly [number, number], wanted: number): Tick[] {
+  const [low, high] = domain
+  const rough = (high - low) / wanted
+  const power = 10 ** Math.floor(Math.log10(rough))
+  const step = [1, 2, 2.5, 5, 10].find((factor) => factor * power >= rough)! * power
+  const ticks: Tick[] = []
+  for (let k = Math.ceil(low / step - 1e-9); k * step <= high + 1e-9 * step; k++)
+    ticks.push({ value: Number((k * step).toPrecision(12)), major: true })
+  return ticks
+}
