@@ -48,7 +48,7 @@ export const EVALUATION_COLUMNS: readonly RecordColumn<Evaluation>[] = [
     title: 'History',
     sortBy: ({ history }) => revisionText(history),
     cell: ({ history }) => (
-      <Link to={`/histories/${history.recordId}`} className="hover:text-ember">
+      <Link to={`/histories/${history.recordId}?revision=${history.number}`} className="hover:text-ember">
         {revisionText(history)}
       </Link>
     ),
@@ -58,7 +58,7 @@ export const EVALUATION_COLUMNS: readonly RecordColumn<Evaluation>[] = [
     title: 'Candidate',
     sortBy: ({ candidate }) => revisionText(candidate),
     cell: ({ candidate }) => (
-      <Link to={`/candidates/${candidate.recordId}`} className="hover:text-ember">
+      <Link to={`/candidates/${candidate.recordId}?revision=${candidate.number}`} className="hover:text-ember">
         {revisionText(candidate)}
       </Link>
     ),
