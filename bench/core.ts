@@ -44,12 +44,24 @@ const coldHistory = (treatment: string): void => {
 export function addCoreBenchmarks(bench: Bench): void {
   const history = buildHistory(fit)
   bench.add(BASELINE, () => void baselineWork())
-  for (const treatment of ['thresholds', 'ideal-switch', 'crossover', 'lattice-2014', 'lattice-2016', 'fit-2018'])
+  for (const treatment of [
+    'thresholds',
+    'ideal-switch',
+    'crossover',
+    'lattice-2014',
+    'lattice-2016',
+    'fit-2018',
+  ])
     bench.add(`history, cold: ${treatment}`, () => coldHistory(treatment))
   bench.add('history, same bath, other expansion', () => void buildHistory(kination))
   bench.add('freeze-out, partial waves', () => void abundance(history, freezeOut))
   bench.add('freeze-in by decay', () => void abundance(history, freezeIn))
   bench.add('everything the Bench shows', () => {
-    benchAnswer({ history: kination, baseline: steps, candidate: freezeOut, window: { hotGeV: 1000, coldGeV: 1e-4 } })
+    benchAnswer({
+      history: kination,
+      baseline: steps,
+      candidate: freezeOut,
+      window: { hotGeV: 1000, coldGeV: 1e-4 },
+    })
   })
 }

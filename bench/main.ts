@@ -13,6 +13,7 @@ export async function main(argv: readonly string[]): Promise<number> {
   const rows = rowsOf(bench, BASELINE)
   process.stdout.write(`${tableText(rows)}\n`)
   const file = argv[0]
-  if (file !== undefined) await writeFile(file, `${JSON.stringify({ coreVersion: CORE_VERSION, rows }, null, 2)}\n`)
+  if (file !== undefined)
+    await writeFile(file, `${JSON.stringify({ coreVersion: CORE_VERSION, rows }, null, 2)}\n`)
   return 0
 }

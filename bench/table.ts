@@ -28,5 +28,8 @@ export function tableText(rows: readonly BenchRow[]): string {
     (row) =>
       `${row.name.padEnd(width)}  ${row.medianMs.toFixed(4).padStart(10)}  ${row.p99Ms.toFixed(4).padStart(10)}  ${row.ratio.toFixed(3).padStart(8)}  ${String(row.samples).padStart(7)}`,
   )
-  return [`${''.padEnd(width)}  ${'median ms'.padStart(10)}  ${'p99 ms'.padStart(10)}  ${'ratio'.padStart(8)}  ${'samples'.padStart(7)}`, ...lines].join('\n')
+  return [
+    `${''.padEnd(width)}  ${'median ms'.padStart(10)}  ${'p99 ms'.padStart(10)}  ${'ratio'.padStart(8)}  ${'samples'.padStart(7)}`,
+    ...lines,
+  ].join('\n')
 }

@@ -79,12 +79,16 @@ export class AnnihilatingState {
 
   /** Values of ln x strictly between two, ascending, where an integrator restarts. */
   breaksBetween(from: number, to: number): number[] {
-    return breaksBetween(this.history, this.lnMass - from, this.lnMass - to, this.rateBreaks).map((lnT) => this.lnMass - lnT)
+    return breaksBetween(this.history, this.lnMass - from, this.lnMass - to, this.rateBreaks).map(
+      (lnT) => this.lnMass - lnT,
+    )
   }
 
   /** Edges in ln x, ascending, of panels on which k is smooth. */
   panelEdges(from: number, to: number, widest: number): number[] {
-    return panelEdges(this.history, this.lnMass - from, this.lnMass - to, widest, this.rateBreaks).map((lnT) => this.lnMass - lnT)
+    return panelEdges(this.history, this.lnMass - from, this.lnMass - to, widest, this.rateBreaks).map(
+      (lnT) => this.lnMass - lnT,
+    )
   }
 
   /** ln T at ln x, kept inside the segment. */
@@ -101,13 +105,20 @@ export class AnnihilatingState {
     const dilution = point.lnDilution === 0 ? 1 : Math.exp(point.lnDilution)
     const perHubble = point.stretch / point.hubble
     this.strength = point.entropy * perHubble * dilution * particle.rate.at(x) * this.share
-    this.lnEquilibrium = logEquilibriumYield(particle.species, particle.massGeV, x, point.gS) - point.lnDilution
-    this.production = point.candidatesPerTime === 0 ? 0 : (point.candidatesPerTime * perHubble) / (point.entropy * dilution)
+    this.lnEquilibrium =
+      logEquilibriumYield(particle.species, particle.massGeV, x, point.gS) - point.lnDilution
+    this.production =
+      point.candidatesPerTime === 0 ? 0 : (point.candidatesPerTime * perHubble) / (point.entropy * dilution)
   }
 
   /** n_eq⟨σv⟩/H at x, with the total n_eq and no factor one half; moves there. */
   rateOverHubble(lnX: number): number {
     this.moveTo(lnX)
-    return (Math.exp(this.lnEquilibrium + this.lnDilution) * this.point.entropy * this.particle.rate.at(Math.exp(lnX))) / this.point.hubble
+    return (
+      (Math.exp(this.lnEquilibrium + this.lnDilution) *
+        this.point.entropy *
+        this.particle.rate.at(Math.exp(lnX))) /
+      this.point.hubble
+    )
   }
 }

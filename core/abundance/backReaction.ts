@@ -43,7 +43,10 @@ export function solveWithBackReaction(
   const point = emptyExpansion()
   const lnEquilibrium = (lnT: number): number => {
     history.at(lnT, point)
-    return logEquilibriumYield([candidate], candidate.massGeV, candidate.massGeV / point.temperature, point.gS) - point.lnDilution
+    return (
+      logEquilibriumYield([candidate], candidate.massGeV, candidate.massGeV / point.temperature, point.gS) -
+      point.lnDilution
+    )
   }
   const free = solveFreezeIn(history, source, FREEZE_IN_RULES[0]!)
   const unit = Math.min(free, Math.exp(lnEquilibrium(lnScale)))

@@ -50,7 +50,8 @@ function following(state: AnnihilatingState, decay: number, lnX: number): number
   state.moveTo(lnX + h)
   const after = state.lnEquilibrium
   state.moveTo(lnX)
-  const lag = ((after - state.lnEquilibrium) / h + decay) / (2 * state.strength * Math.exp(state.lnEquilibrium))
+  const lag =
+    ((after - state.lnEquilibrium) / h + decay) / (2 * state.strength * Math.exp(state.lnEquilibrium))
   return Math.exp(state.lnEquilibrium) * (1 - lag)
 }
 
@@ -79,7 +80,8 @@ export function solveDecayingParent(
 ): DecayedParent | null {
   const { history, lnMass } = state
   const maximum = history.input.maximumTemperatureGeV
-  const start = maximum === null ? Math.log(EARLIEST_X) : Math.max(Math.log(EARLIEST_X), lnMass - Math.log(maximum))
+  const start =
+    maximum === null ? Math.log(EARLIEST_X) : Math.max(Math.log(EARLIEST_X), lnMass - Math.log(maximum))
   const today = lnMass - Math.log(history.temperatureToday)
   const decayAt = decayPerLnX(state, widthGeV)
   const sampler = new Sampler(samples)
@@ -161,5 +163,10 @@ function halfWay(milestones: readonly { lnX: number; z: number }[], last: number
   const high = milestones[Math.max(after, 0)]!
   const low = milestones[Math.max(after - 1, 0)]!
   if (low === high) return high.lnX
-  return brent((lnX) => low.z + ((high.z - low.z) * (lnX - low.lnX)) / (high.lnX - low.lnX) - last / 2, low.lnX, high.lnX, 1e-9)
+  return brent(
+    (lnX) => low.z + ((high.z - low.z) * (lnX - low.lnX)) / (high.lnX - low.lnX) - last / 2,
+    low.lnX,
+    high.lnX,
+    1e-9,
+  )
 }

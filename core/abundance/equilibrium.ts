@@ -13,7 +13,12 @@ export interface EquilibriumSpecies {
  * ln Y_eq = ln(Σ n_eq/s) at x = m/T, where the bath has g_s and m is the mass x is made of.
  * The first species is taken as the reference, so that sums of underflowing numbers keep their digits.
  */
-export function logEquilibriumYield(species: readonly EquilibriumSpecies[], massGeV: number, x: number, gS: number): number {
+export function logEquilibriumYield(
+  species: readonly EquilibriumSpecies[],
+  massGeV: number,
+  x: number,
+  gS: number,
+): number {
   const first = species[0]!
   const lead = logNumberDensity((x * first.massGeV) / massGeV, first.statistics)
   let sum = first.degreesOfFreedom

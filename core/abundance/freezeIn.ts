@@ -28,7 +28,12 @@ export interface FreezeInSource {
 }
 
 /** Rules of rising care for `checked`. */
-export const FREEZE_IN_RULES: readonly QuadratureRule[] = [gaussLegendre(6), gaussLegendre(10), gaussLegendre(16), gaussLegendre(24)]
+export const FREEZE_IN_RULES: readonly QuadratureRule[] = [
+  gaussLegendre(6),
+  gaussLegendre(10),
+  gaussLegendre(16),
+  gaussLegendre(24),
+]
 
 const WIDEST_PANEL = 1
 
@@ -46,7 +51,12 @@ export function productionPerLnT(history: ThermalHistory, source: FreezeInSource
  * The yield today.
  * @param samples wanted ln x, ascending; ln Y is written there, NaN before the start
  */
-export function solveFreezeIn(history: ThermalHistory, source: FreezeInSource, rule: QuadratureRule, samples: YieldSamples | null = null): number {
+export function solveFreezeIn(
+  history: ThermalHistory,
+  source: FreezeInSource,
+  rule: QuadratureRule,
+  samples: YieldSamples | null = null,
+): number {
   const lnScale = Math.log(source.scaleGeV)
   const production = productionPerLnT(history, source)
   const sampler = new Sampler(samples)
@@ -57,14 +67,19 @@ export function solveFreezeIn(history: ThermalHistory, source: FreezeInSource, r
   }
   const hot = Math.log(source.hottestGeV)
   const today = Math.log(history.temperatureToday)
-  const cold = Math.max(today, Math.log(Math.min(source.coldestGeV, history.expansion.producesUntil ?? Infinity)))
+  const cold = Math.max(
+    today,
+    Math.log(Math.min(source.coldestGeV, history.expansion.producesUntil ?? Infinity)),
+  )
   const edges = panelEdges(history, hot, cold, WIDEST_PANEL, source.breaks.map(Math.log))
   let z = 0
   sampler.upTo(lnScale - hot - 1e-12, () => NaN)
   for (let i = 0; i + 1 < edges.length; i++) {
     const [from, to] = [edges[i]!, edges[i + 1]!]
     const before = z
-    sampler.upTo(lnScale - to, (lnX) => lnYield(lnX, before + integrateWith(rule, production, lnScale - lnX, from)))
+    sampler.upTo(lnScale - to, (lnX) =>
+      lnYield(lnX, before + integrateWith(rule, production, lnScale - lnX, from)),
+    )
     z += integrateWith(rule, production, to, from)
   }
   sampler.upTo(lnScale - today, (lnX) => lnYield(lnX, z))

@@ -23,7 +23,12 @@ const hottest = (history: ThermalHistory, unbounded: number): number =>
  * the first term alone for Maxwell–Boltzmann.
  * Source: Hall, Jedamzik, March-Russell, West, JHEP 03 (2010) 080, eq. 4.5; the sum: exact statistics of the parent.
  */
-export function decaySource(history: ThermalHistory, parent: EquilibriumSpecies, widthGeV: number, perDecay: number): FreezeInSource {
+export function decaySource(
+  history: ThermalHistory,
+  parent: EquilibriumSpecies,
+  widthGeV: number,
+  perDecay: number,
+): FreezeInSource {
   const { massGeV, degreesOfFreedom, statistics } = parent
   const factor = (perDecay * degreesOfFreedom * massGeV ** 2 * widthGeV) / (2 * Math.PI ** 2)
   return {
@@ -41,12 +46,16 @@ export const UNBOUNDED_SCATTERING_GEV = 9e15
 const REACTION_TOLERANCE = 1e-10
 
 /** Collisions 1 + 2 → X + 3; see rates/scatteringRate.ts. */
-export function scatteringSource(history: ThermalHistory, { massGeV, scattering }: FreezeInScatteringInput): FreezeInSource {
+export function scatteringSource(
+  history: ThermalHistory,
+  { massGeV, scattering }: FreezeInScatteringInput,
+): FreezeInSource {
   const hottestGeV = hottest(history, UNBOUNDED_SCATTERING_GEV)
   if (scattering.kind === 'constant-matrix-element') {
     return {
       scaleGeV: massGeV,
-      reactionDensity: (temperature) => constantMatrixElementRate(temperature, massGeV, scattering.matrixElementSquared),
+      reactionDensity: (temperature) =>
+        constantMatrixElementRate(temperature, massGeV, scattering.matrixElementSquared),
       hottestGeV,
       coldestGeV: massGeV / LATEST_X,
       breaks: [],
@@ -60,7 +69,10 @@ export function scatteringSource(history: ThermalHistory, { massGeV, scattering 
     if (scattering.kind === 'table') return zeroOutside(table!, rootS)
     return scattering.crossSectionGeVMinus2 * (rootS / scattering.referenceEnergyGeV) ** scattering.exponent
   }
-  const scaled = lazyPositive((temperature) => scaledScatteringRate(temperature, sigma, incoming, least, knots), REACTION_TOLERANCE)
+  const scaled = lazyPositive(
+    (temperature) => scaledScatteringRate(temperature, sigma, incoming, least, knots),
+    REACTION_TOLERANCE,
+  )
   return {
     scaleGeV: least,
     reactionDensity: (temperature) => scaled(temperature) * Math.exp(-least / temperature),
@@ -77,12 +89,16 @@ const ULTRAVIOLET_SPAN = 1e13
  * Ultraviolet freeze-in, γ = C T^{2q+4}/Λ^{2q}: made at the maximum temperature, Y ∝ T_max^{2q−1}.
  * Source: Elahi, Kolda, Unwin, JHEP 03 (2015) 048.
  */
-export function ultravioletSource(history: ThermalHistory, { ultraviolet }: FreezeInUltravioletInput): FreezeInSource {
+export function ultravioletSource(
+  history: ThermalHistory,
+  { ultraviolet }: FreezeInUltravioletInput,
+): FreezeInSource {
   const { coefficient, scaleGeV, index } = ultraviolet
   const hottestGeV = history.input.maximumTemperatureGeV!
   return {
     scaleGeV: hottestGeV,
-    reactionDensity: (temperature) => coefficient * temperature ** 4 * (temperature / scaleGeV) ** (2 * index),
+    reactionDensity: (temperature) =>
+      coefficient * temperature ** 4 * (temperature / scaleGeV) ** (2 * index),
     hottestGeV,
     coldestGeV: Math.max(history.temperatureToday * 1.001, hottestGeV / ULTRAVIOLET_SPAN),
     breaks: [],

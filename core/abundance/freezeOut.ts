@@ -94,7 +94,9 @@ function linearProblem(state: AnnihilatingState, unit: number): OdeProblem {
     dimension: 1,
     evaluate(lnX, y, slope, jacobian) {
       state.moveTo(lnX)
-      slope[0] = (state.strength * Math.exp(2 * state.lnEquilibrium) + state.production) / unit - state.strength * unit * y[0]! * y[0]!
+      slope[0] =
+        (state.strength * Math.exp(2 * state.lnEquilibrium) + state.production) / unit -
+        state.strength * unit * y[0]! * y[0]!
       jacobian[0] = -2 * state.strength * unit * y[0]!
     },
   }
@@ -103,7 +105,8 @@ function linearProblem(state: AnnihilatingState, unit: number): OdeProblem {
 /** ln of k times the number of partners, over x and over 12: positive where equilibrium is certain. */
 function certainty(state: AnnihilatingState, lnX: number): number {
   state.moveTo(lnX)
-  const lnPartners = state.asymmetry === 0 ? state.lnEquilibrium : Math.log(Math.exp(steadyYield(state)) + state.asymmetry)
+  const lnPartners =
+    state.asymmetry === 0 ? state.lnEquilibrium : Math.log(Math.exp(steadyYield(state)) + state.asymmetry)
   return Math.log(state.strength) + lnPartners - Math.max(lnX, 0) - LN_CERTAIN
 }
 
@@ -114,7 +117,8 @@ function lastCertainty(state: AnnihilatingState, from: number): number {
   while (late > from) {
     const early = Math.max(from, late - 0.25)
     const earlyExcess = certainty(state, early)
-    if (earlyExcess > 0) return lateExcess > 0 ? late : early + ((late - early) * earlyExcess) / (earlyExcess - lateExcess)
+    if (earlyExcess > 0)
+      return lateExcess > 0 ? late : early + ((late - early) * earlyExcess) / (earlyExcess - lateExcess)
     late = early
     lateExcess = earlyExcess
   }
@@ -160,7 +164,8 @@ function leaveZero(run: Run): void {
   const z = solveStretch(run, linearProblem(state, unit), 0, run.lnX + length, {
     absoluteTolerance: run.effort.tolerance,
     firstStep: 1e-4 * length,
-    onStep: (step) => run.sampler.upTo(step.to, (lnX) => lnYield(state, lnX, Math.log(unit * step.at(lnX, 0)))),
+    onStep: (step) =>
+      run.sampler.upTo(step.to, (lnX) => lnYield(state, lnX, Math.log(unit * step.at(lnX, 0)))),
   })
   run.lnZ = Math.log(unit * z)
 }
@@ -176,14 +181,19 @@ function followStep(run: Run, step: OdeStep): Outcome {
   const leadAtEnd = lead(step.to)
   if (run.watchesFreezeOut && run.freezeOutX === null && leadAtEnd > LN_DEPARTURE) {
     const early = lead(step.from) - LN_DEPARTURE
-    run.freezeOutX = Math.exp(early >= 0 ? step.from : brent((lnX) => lead(lnX) - LN_DEPARTURE, step.from, step.to, 1e-13))
+    run.freezeOutX = Math.exp(
+      early >= 0 ? step.from : brent((lnX) => lead(lnX) - LN_DEPARTURE, step.from, step.to, 1e-13),
+    )
     state.moveTo(step.to)
   }
   // Z_eq may still rise by what is left of the dilution, and no more.
   const lnZ = step.end[0]!
-  const lnGainOverLoss = 2 * (state.lnEquilibrium + state.lnDilution) - lnZ - Math.log(Math.exp(lnZ) + state.asymmetry)
+  const lnGainOverLoss =
+    2 * (state.lnEquilibrium + state.lnDilution) - lnZ - Math.log(Math.exp(lnZ) + state.asymmetry)
   if (state.productionOver && lnGainOverLoss < LN_NEGLIGIBLE) return 'production over'
-  return !run.watchesFreezeOut && Math.abs(leadAtEnd) < ARRIVED && certainty(state, step.to) > 0 ? 'in equilibrium' : 'go on'
+  return !run.watchesFreezeOut && Math.abs(leadAtEnd) < ARRIVED && certainty(state, step.to) > 0
+    ? 'in equilibrium'
+    : 'go on'
 }
 
 /** The integration while production matters; ends at today, where production is over, or where Z has come to equilibrium. */
@@ -205,7 +215,9 @@ function whileProduced(run: Run): Outcome {
 
 /** Z after ∫ k d ln x without production: 1/Z grows by it; with an asymmetry, ln(1 + η/Z) grows by η times it. */
 function annihilated(z: number, asymmetry: number, integral: number): number {
-  return asymmetry === 0 ? 1 / (1 / z + integral) : asymmetry / Math.expm1(Math.log1p(asymmetry / z) + asymmetry * integral)
+  return asymmetry === 0
+    ? 1 / (1 / z + integral)
+    : asymmetry / Math.expm1(Math.log1p(asymmetry / z) + asymmetry * integral)
 }
 
 /** What annihilation still does without production. */
@@ -225,7 +237,9 @@ function afterProduction(run: Run): void {
     const before = integral
     const share = strengthAt(from) * (Math.exp(lnZAfter(before)) + state.asymmetry)
     const rule = panelRule(effort, share)
-    run.sampler.upTo(to, (lnX) => lnYield(state, lnX, lnZAfter(before + integrateWith(rule, strengthAt, from, lnX))))
+    run.sampler.upTo(to, (lnX) =>
+      lnYield(state, lnX, lnZAfter(before + integrateWith(rule, strengthAt, from, lnX))),
+    )
     integral += share < NOTHING_MORE ? 0 : integrateWith(rule, strengthAt, from, to)
   }
   run.lnX = run.lnXToday
@@ -237,7 +251,10 @@ function followEquilibrium(run: Run, from: number): void {
   const { state } = run
   state.readAll()
   const last = lastCertainty(state, from)
-  run.sampler.upTo(last, (lnX) => lnYield(state, lnX, state.lnEquilibrium))
+  run.sampler.upTo(last, (lnX) => {
+    state.moveTo(lnX)
+    return steadyYield(state) + state.lnDilution
+  })
   run.lnX = last
   state.moveTo(last)
   run.lnZ = last > from ? followingYield(state, last) : steadyYield(state)
@@ -248,7 +265,12 @@ function followEquilibrium(run: Run, from: number): void {
  * @param samples wanted values of ln x; ln Y is written there, NaN before the start
  * @throws ConvergenceError when the integrator does not arrive
  */
-export function solveFreezeOut(state: AnnihilatingState, start: FreezeOutStart, effort: Effort, samples: YieldSamples | null = null): FreezeOut {
+export function solveFreezeOut(
+  state: AnnihilatingState,
+  start: FreezeOutStart,
+  effort: Effort,
+  samples: YieldSamples | null = null,
+): FreezeOut {
   const fromEquilibrium = start.initialAbundance === 'equilibrium'
   const lnStart = Math.log(start.x)
   const run: Run = {

@@ -5,8 +5,16 @@ import type { ThermalHistory } from '../history/thermalHistory.ts'
 const SAME = 1e-12
 
 /** Edges in ln T, descending from `hot` to `cold`, none farther apart than `widest`. */
-export function panelEdges(history: ThermalHistory, hot: number, cold: number, widest: number, more: readonly number[] = []): number[] {
-  const inner = [...history.radiation.table.edges, ...history.breaks.map(Math.log), ...more].filter((edge) => edge > cold && edge < hot)
+export function panelEdges(
+  history: ThermalHistory,
+  hot: number,
+  cold: number,
+  widest: number,
+  more: readonly number[] = [],
+): number[] {
+  const inner = [...history.radiation.table.edges, ...history.breaks.map(Math.log), ...more].filter(
+    (edge) => edge > cold && edge < hot,
+  )
   const cuts = [hot, ...inner.sort((a, b) => b - a), cold]
   const edges = [hot]
   for (const to of cuts.slice(1)) {
@@ -20,7 +28,12 @@ export function panelEdges(history: ThermalHistory, hot: number, cold: number, w
 }
 
 /** Breaks of the history and those given, as ln T, strictly between two values: where an integrator restarts. Descending. */
-export function breaksBetween(history: ThermalHistory, hot: number, cold: number, more: readonly number[] = []): number[] {
+export function breaksBetween(
+  history: ThermalHistory,
+  hot: number,
+  cold: number,
+  more: readonly number[] = [],
+): number[] {
   return [...new Set([...history.breaks.map(Math.log), ...more])]
     .filter((edge) => edge < hot - SAME && edge > cold + SAME)
     .sort((a, b) => b - a)

@@ -4,7 +4,10 @@ export interface YieldSamples {
   readonly lnYield: Float64Array
 }
 
-export const emptySamples = (lnX: Float64Array): YieldSamples => ({ lnX, lnYield: new Float64Array(lnX.length).fill(NaN) })
+export const emptySamples = (lnX: Float64Array): YieldSamples => ({
+  lnX,
+  lnYield: new Float64Array(lnX.length).fill(NaN),
+})
 
 /** Fills samples in as a solution advances. */
 export class Sampler {

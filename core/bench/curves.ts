@@ -34,7 +34,11 @@ const curve = (temperatureGeV: Float64Array, valueAt: (temperatureGeV: number) =
 })
 
 /** Y of the candidate; NaN where it does not exist yet. */
-export function yieldCurve(history: ThermalHistory, candidate: CandidateInput, temperatureGeV: Float64Array): Curve {
+export function yieldCurve(
+  history: ThermalHistory,
+  candidate: CandidateInput,
+  temperatureGeV: Float64Array,
+): Curve {
   const mechanism = mechanismOf(candidate)
   const scale = mechanism.scaleGeV(history, candidate)
   const lnX = temperatureGeV.map((temperature) => Math.log(scale / temperature))
@@ -42,7 +46,11 @@ export function yieldCurve(history: ThermalHistory, candidate: CandidateInput, t
 }
 
 /** Y_eq of the candidate, or of the parent it comes from. */
-export function equilibriumCurve(history: ThermalHistory, candidate: CandidateInput, temperatureGeV: Float64Array): Curve {
+export function equilibriumCurve(
+  history: ThermalHistory,
+  candidate: CandidateInput,
+  temperatureGeV: Float64Array,
+): Curve {
   const point = emptyExpansion()
   const { species } = mechanismOf(candidate).equilibrium(candidate)
   const mass = species[0]!.massGeV
@@ -53,7 +61,11 @@ export function equilibriumCurve(history: ThermalHistory, candidate: CandidateIn
 }
 
 /** The rate that decides over H: n_eq⟨σv⟩/H, Γ_B/H, or production per candidate in equilibrium. */
-export function rateOverHubbleCurve(history: ThermalHistory, candidate: CandidateInput, temperatureGeV: Float64Array): Curve {
+export function rateOverHubbleCurve(
+  history: ThermalHistory,
+  candidate: CandidateInput,
+  temperatureGeV: Float64Array,
+): Curve {
   return curve(temperatureGeV, mechanismOf(candidate).rateOverHubble(history, candidate))
 }
 

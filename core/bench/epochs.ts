@@ -36,7 +36,8 @@ export function epochsOf(history: HistoryInput): EpochMark[] {
     marks.push(mark('entropy-step', 'entropy release', expansion.temperatureGeV, 6))
   if (expansion.kind === 'early-matter') {
     marks.push(mark('matter-ends', 'matter era ends', expansion.reheatTemperatureGeV, 6))
-    if (expansion.startTemperatureGeV !== undefined) marks.push(mark('matter-begins', 'matter equals radiation', expansion.startTemperatureGeV, 6))
+    if (expansion.startTemperatureGeV !== undefined)
+      marks.push(mark('matter-begins', 'matter equals radiation', expansion.startTemperatureGeV, 6))
   }
   if (maximumTemperatureGeV !== null)
     marks.push(mark('maximum-temperature', 'maximum temperature', maximumTemperatureGeV, 7))

@@ -13,11 +13,13 @@ const EQUATION: Record<CandidateInput['mechanism'], Pick<Working, 'formula' | 's
     source: 'Gondolo & Gelmini, Nucl. Phys. B 360 (1991) 145',
   },
   'freeze-in-decay': {
-    formula: 'dY/d ln x = n_X g_B m_B² T Γ/(2π²) · Σ_k (−η)^(k+1) K₁(k m_B/T)/k · (1 + δ_s)/(sH), from nothing',
+    formula:
+      'dY/d ln x = n_X g_B m_B² T Γ/(2π²) · Σ_k (−η)^(k+1) K₁(k m_B/T)/k · (1 + δ_s)/(sH), from nothing',
     source: 'Hall, Jedamzik, March-Russell, West, JHEP 03 (2010) 080',
   },
   'freeze-in-scattering': {
-    formula: 'dY/d ln x = γ(T)(1 + δ_s)/(sH), γ = g₁g₂T/(32π⁴) ∫ σ [s−(m₁+m₂)²][s−(m₁−m₂)²] K₁(√s/T)/√s ds, from nothing',
+    formula:
+      'dY/d ln x = γ(T)(1 + δ_s)/(sH), γ = g₁g₂T/(32π⁴) ∫ σ [s−(m₁+m₂)²][s−(m₁−m₂)²] K₁(√s/T)/√s ds, from nothing',
     source: 'Gondolo & Gelmini, Nucl. Phys. B 360 (1991) 145; Edsjö & Gondolo, Phys. Rev. D 56 (1997) 1879',
   },
   'freeze-in-ultraviolet': {

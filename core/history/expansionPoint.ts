@@ -6,7 +6,8 @@ export const ENTROPY_FACTOR = (2 * Math.PI ** 2) / 45
 export const ENERGY_FACTOR = Math.PI ** 2 / 30
 
 /** H of an energy density, both in powers of GeV. */
-export const hubbleOf = (energyDensity: number): number => Math.sqrt((8 * Math.PI * energyDensity) / 3) / PLANCK_MASS_GEV
+export const hubbleOf = (energyDensity: number): number =>
+  Math.sqrt((8 * Math.PI * energyDensity) / 3) / PLANCK_MASS_GEV
 
 /** What the expansion is doing at one temperature; natural units, GeV. */
 export interface ExpansionPoint {
@@ -43,7 +44,13 @@ export const emptyExpansion = (): ExpansionPoint => ({
 })
 
 /** Sets what radiation alone gives, from T, g_ρ, g_s and d ln g_s/d ln T; entropy conserved. */
-export function setRadiation(out: ExpansionPoint, temperature: number, gRho: number, gS: number, logSlope: number): void {
+export function setRadiation(
+  out: ExpansionPoint,
+  temperature: number,
+  gRho: number,
+  gS: number,
+  logSlope: number,
+): void {
   const cubed = temperature * temperature * temperature
   out.temperature = temperature
   out.gRho = gRho

@@ -15,7 +15,12 @@ export const tablePoints = (rows: string) =>
     .describe(rows)
     .superRefine((points, context) => {
       const at = points.findIndex((point, i) => i > 0 && !(point[0] > points[i - 1]![0]))
-      if (at > 0) context.addIssue({ code: 'custom', path: [at, 0], message: `allowed: above ${points[at - 1]![0]}, the row before; rows ascend` })
+      if (at > 0)
+        context.addIssue({
+          code: 'custom',
+          path: [at, 0],
+          message: `allowed: above ${points[at - 1]![0]}, the row before; rows ascend`,
+        })
     })
 
 const partialWaves = z
@@ -48,7 +53,10 @@ const resonance = z
     spin: z.number().min(0).max(4).multipleOf(0.5).describe('Spin J_R'),
     branchingProduct: positive.max(0.25).describe('B = B_i B_f, product of branchings on the peak'),
   })
-  .refine((pole) => pole.widthGeV < pole.massGeV, { path: ['widthGeV'], message: 'allowed: below the mass of the resonance' })
+  .refine((pole) => pole.widthGeV < pole.massGeV, {
+    path: ['widthGeV'],
+    message: 'allowed: below the mass of the resonance',
+  })
   .refine((pole) => pole.widthGeV >= 1e-9 * pole.massGeV, {
     path: ['widthGeV'],
     message: 'allowed: at least 1e-9 of the mass; narrower ones are not resolved',
@@ -64,7 +72,10 @@ const sommerfeld = z.strictObject({
 const coannihilation = z
   .strictObject({
     kind: z.literal('coannihilation'),
-    weights: z.enum(['exact', 'nonrelativistic']).default('exact').describe('Equilibrium weights of the species'),
+    weights: z
+      .enum(['exact', 'nonrelativistic'])
+      .default('exact')
+      .describe('Equilibrium weights of the species'),
     others: z
       .array(z.strictObject({ massGeV, degreesOfFreedom, statistics: quantumStatistics }))
       .min(1)
@@ -81,19 +92,35 @@ const coannihilation = z
       )
       .min(1)
       .max(500)
-      .describe('⟨σv⟩ of each pair, averaged over particle and antiparticle; an off-diagonal pair is given once'),
+      .describe(
+        '⟨σv⟩ of each pair, averaged over particle and antiparticle; an off-diagonal pair is given once',
+      ),
   })
   .superRefine(({ others, pairs }, context) => {
     const seen = new Set<string>()
     pairs.forEach(({ first, second }, i) => {
       for (const [name, index] of Object.entries({ first, second }))
-        if (index > others.length) context.addIssue({ code: 'custom', path: ['pairs', i, name], message: `allowed: 0 to ${others.length}` })
+        if (index > others.length)
+          context.addIssue({
+            code: 'custom',
+            path: ['pairs', i, name],
+            message: `allowed: 0 to ${others.length}`,
+          })
       const key = [first, second].sort((a, b) => a - b).join('-')
-      if (seen.has(key)) context.addIssue({ code: 'custom', path: ['pairs', i], message: 'this pair is given twice; an off-diagonal pair counts twice by itself' })
+      if (seen.has(key))
+        context.addIssue({
+          code: 'custom',
+          path: ['pairs', i],
+          message: 'this pair is given twice; an off-diagonal pair counts twice by itself',
+        })
       seen.add(key)
     })
     if (pairs.every((pair) => pair.sWaveCm3PerS + pair.pWaveCm3PerS === 0))
-      context.addIssue({ code: 'custom', path: ['pairs'], message: 'allowed: at least one pair that annihilates' })
+      context.addIssue({
+        code: 'custom',
+        path: ['pairs'],
+        message: 'allowed: at least one pair that annihilates',
+      })
   })
 
 const averaged = z.strictObject({
@@ -104,7 +131,15 @@ const averaged = z.strictObject({
 
 /** Thermally averaged annihilation cross-section ⟨σv⟩. */
 export const annihilationInput = z
-  .discriminatedUnion('kind', [partialWaves, powerLaw, crossSectionTable, resonance, sommerfeld, coannihilation, averaged])
+  .discriminatedUnion('kind', [
+    partialWaves,
+    powerLaw,
+    crossSectionTable,
+    resonance,
+    sommerfeld,
+    coannihilation,
+    averaged,
+  ])
   .meta({ id: 'Annihilation' })
 
 export type AnnihilationInput = z.output<typeof annihilationInput>

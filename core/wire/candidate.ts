@@ -1,6 +1,13 @@
 import { z } from 'zod'
 import { annihilationInput, tablePoints } from './annihilation.ts'
-import { degreesOfFreedom, massGeV, nonNegative, positive, quantumStatistics, temperatureGeV } from './numbers.ts'
+import {
+  degreesOfFreedom,
+  massGeV,
+  nonNegative,
+  positive,
+  quantumStatistics,
+  temperatureGeV,
+} from './numbers.ts'
 
 const mass = massGeV.describe('Mass of the candidate, GeV')
 
@@ -14,8 +21,12 @@ const startX = positive.min(1e-3).max(500).optional().describe('x = m/T at the s
 const bothSigns = degreesOfFreedom.describe('Internal states, particle and antiparticle together')
 
 /** Coannihilation may name only light companions as its candidate's partners; index 0 must be the lightest. */
-const lightestFirst = (candidate: { massGeV: number; annihilation: z.output<typeof annihilationInput> }): boolean =>
-  candidate.annihilation.kind !== 'coannihilation' || candidate.annihilation.others.every((other) => other.massGeV >= candidate.massGeV)
+const lightestFirst = (candidate: {
+  massGeV: number
+  annihilation: z.output<typeof annihilationInput>
+}): boolean =>
+  candidate.annihilation.kind !== 'coannihilation' ||
+  candidate.annihilation.others.every((other) => other.massGeV >= candidate.massGeV)
 
 const freezeOutFields = {
   massGeV: mass,
@@ -36,7 +47,10 @@ export const freezeOutInput = z
       .describe('Abundance at the start: in equilibrium, or none'),
     startX,
   })
-  .refine(lightestFirst, { path: ['annihilation', 'others'], message: 'allowed: masses not below the candidate’s, which must be the lightest' })
+  .refine(lightestFirst, {
+    path: ['annihilation', 'others'],
+    message: 'allowed: masses not below the candidate’s, which must be the lightest',
+  })
   .meta({ id: 'FreezeOut' })
 
 const parentInput = z
@@ -46,8 +60,13 @@ const parentInput = z
     statistics: z.enum(['fermion', 'boson', 'maxwell-boltzmann']),
     lifetimeS: positive.max(1e25).optional().describe('Lifetime τ, s; give this or the width'),
     widthGeV: positive.optional().describe('Width Γ = ħ/τ, GeV; give this or the lifetime'),
-    selfConjugate: z.boolean().default(true).describe('Whether the parent is its own antiparticle; matters when it annihilates'),
-    annihilation: annihilationInput.optional().describe('With it the parent has a freeze-out of its own; without, it stays in equilibrium'),
+    selfConjugate: z
+      .boolean()
+      .default(true)
+      .describe('Whether the parent is its own antiparticle; matters when it annihilates'),
+    annihilation: annihilationInput
+      .optional()
+      .describe('With it the parent has a freeze-out of its own; without, it stays in equilibrium'),
   })
   .refine((parent) => (parent.lifetimeS === undefined) !== (parent.widthGeV === undefined), {
     path: ['lifetimeS'],
@@ -66,8 +85,14 @@ export const freezeInDecayInput = z
     statistics: quantumStatistics,
     parent: parentInput,
     perDecay: positive.max(100).default(1).describe('Particles of the candidate per decay'),
-    backReaction: z.boolean().default(false).describe('Whether inverse decays are kept: source times 1 − (Y/Y_eq)^perDecay'),
-    lateDecay: z.boolean().default(true).describe('Whether an annihilating parent is followed through its freeze-out and decay'),
+    backReaction: z
+      .boolean()
+      .default(false)
+      .describe('Whether inverse decays are kept: source times 1 − (Y/Y_eq)^perDecay'),
+    lateDecay: z
+      .boolean()
+      .default(true)
+      .describe('Whether an annihilating parent is followed through its freeze-out and decay'),
   })
   .refine((candidate) => candidate.perDecay * candidate.massGeV <= candidate.parent.massGeV, {
     path: ['massGeV'],
@@ -75,7 +100,8 @@ export const freezeInDecayInput = z
   })
   .refine((candidate) => !(candidate.backReaction && candidate.parent.annihilation && candidate.lateDecay), {
     path: ['backReaction'],
-    message: 'allowed: false while an annihilating parent is followed; inverse decays are kept for a parent in equilibrium only',
+    message:
+      'allowed: false while an annihilating parent is followed; inverse decays are kept for a parent in equilibrium only',
   })
   .meta({ id: 'FreezeInDecay' })
 
@@ -90,7 +116,9 @@ const scatteringInput = z
   .discriminatedUnion('kind', [
     z.strictObject({
       kind: z.literal('constant-matrix-element'),
-      matrixElementSquared: positive.max(1e3).describe('|M|², summed over all spins; massless initial states, final masses (m, 0)'),
+      matrixElementSquared: positive
+        .max(1e3)
+        .describe('|M|², summed over all spins; massless initial states, final masses (m, 0)'),
     }),
     z.strictObject({
       kind: z.literal('power-law'),
@@ -135,7 +163,10 @@ export const asymmetricInput = z
   .strictObject({
     mechanism: z.literal('asymmetric'),
     ...freezeOutFields,
-    selfConjugate: z.literal(false).default(false).describe('An asymmetric particle is never its own antiparticle'),
+    selfConjugate: z
+      .literal(false)
+      .default(false)
+      .describe('An asymmetric particle is never its own antiparticle'),
     asymmetry: positive.max(1).describe('η_X = Y₊ − Y₋, today'),
     startX,
   })

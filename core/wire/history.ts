@@ -77,20 +77,34 @@ export const couplingInput = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('ratio'), ratio: positive.max(10).describe('T_X/T, constant') }),
 ])
 
-const startGiven = (era: { startTemperatureGeV?: number | undefined; dilution?: number | undefined }): boolean =>
-  (era.startTemperatureGeV === undefined) !== (era.dilution === undefined)
+const startGiven = (era: {
+  startTemperatureGeV?: number | undefined
+  dilution?: number | undefined
+}): boolean => (era.startTemperatureGeV === undefined) !== (era.dilution === undefined)
 
 /** A decaying matter field that dominates for a while. */
 const earlyMatterInput = z
   .strictObject({
     kind: z.literal('early-matter'),
-    reheatTemperatureGeV: temperatureGeV.describe('T_RH, GeV: the field’s width is H of pure radiation at this temperature'),
-    startTemperatureGeV: temperatureGeV.optional().describe('Temperature at which field and radiation are equal, GeV; give this or the dilution'),
-    dilution: z.number().gt(1).max(1e12).optional().describe('Factor D by which s a³ grows; give this or the start'),
+    reheatTemperatureGeV: temperatureGeV.describe(
+      'T_RH, GeV: the field’s width is H of pure radiation at this temperature',
+    ),
+    startTemperatureGeV: temperatureGeV
+      .optional()
+      .describe('Temperature at which field and radiation are equal, GeV; give this or the dilution'),
+    dilution: z
+      .number()
+      .gt(1)
+      .max(1e12)
+      .optional()
+      .describe('Factor D by which s a³ grows; give this or the start'),
     branching: nonNegative.max(1e6).default(0).describe('Particles of the candidate per decay of the field'),
     fieldMassGeV: positive.max(1e19).optional().describe('Mass of the field, GeV; needed with a branching'),
   })
-  .refine(startGiven, { path: ['startTemperatureGeV'], message: 'allowed: exactly one of startTemperatureGeV and dilution' })
+  .refine(startGiven, {
+    path: ['startTemperatureGeV'],
+    message: 'allowed: exactly one of startTemperatureGeV and dilution',
+  })
   .refine((era) => era.branching === 0 || era.fieldMassGeV !== undefined, {
     path: ['fieldMassGeV'],
     message: 'needed when the field makes candidates: their number is ρ_φ over this mass',

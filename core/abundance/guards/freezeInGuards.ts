@@ -20,12 +20,16 @@ export function freezeInGuards(facts: FreezeInFacts): Guard[] {
   const fraction = facts.yieldToday / facts.equilibriumYield
   if (fraction > 0.1) {
     const message = 'The yield comes near that of equilibrium: the inverse process would lower it.'
-    guards.push(raise('not-freeze-in', message, fraction, 0.1, 'Y/Y_eq', 'Hall et al., JHEP 03 (2010) 080, §2'))
+    guards.push(
+      raise('not-freeze-in', message, fraction, 0.1, 'Y/Y_eq', 'Hall et al., JHEP 03 (2010) 080, §2'),
+    )
   }
   const { maximumTemperatureGeV, unboundedPeakGeV } = facts
   if (maximumTemperatureGeV !== null && maximumTemperatureGeV < unboundedPeakGeV) {
     const message = 'The maximum temperature lies below the production peak: only the tail is made.'
-    guards.push(raise('production-cut-off', message, maximumTemperatureGeV, unboundedPeakGeV, 'GeV', COMMON_PRACTICE))
+    guards.push(
+      raise('production-cut-off', message, maximumTemperatureGeV, unboundedPeakGeV, 'GeV', COMMON_PRACTICE),
+    )
   }
   if (facts.massGeV < 10 * KEV) {
     const message = 'A freeze-in candidate this light moves fast enough to smooth structure on small scales.'
@@ -50,7 +54,8 @@ export function decayGuards({ lifetimeS, widthOverHubble }: DecayFacts): Guard[]
     guards.push(raise('late-decay', message, lifetimeS, 0.1, 's', COMMON_PRACTICE))
   }
   if (widthOverHubble !== undefined && widthOverHubble > 0.1) {
-    const message = 'The parent decays near its own freeze-out: freeze-in and late decay are no separate parts of the answer.'
+    const message =
+      'The parent decays near its own freeze-out: freeze-in and late decay are no separate parts of the answer.'
     guards.push(raise('decay-near-freeze-out', message, widthOverHubble, 0.1, 'Γ/H', COMMON_PRACTICE))
   }
   return guards

@@ -8,7 +8,9 @@ import { COMMON_PRACTICE, raise } from './guard.ts'
 
 /** Whether the p-wave dominates at x: then unitarity caps the next partial wave. */
 function pWaveDominates({ annihilation }: FreezeOutInput, x: number): boolean {
-  return annihilation.kind === 'partial-waves' && (6 * annihilation.pWaveCm3PerS) / x > annihilation.sWaveCm3PerS
+  return (
+    annihilation.kind === 'partial-waves' && (6 * annihilation.pWaveCm3PerS) / x > annihilation.sWaveCm3PerS
+  )
 }
 
 /** ⟨σv⟩ ≤ 4π(2J + 1)/m² ⟨1/v⟩, with ⟨1/v⟩ = √(x/π) for two Maxwell–Boltzmann particles of equal mass. */
@@ -16,9 +18,19 @@ function unitarity(candidate: FreezeOutInput, x: number, rate: number): Guard[] 
   const wave = pWaveDominates(candidate, x) ? 1 : 0
   const limit = ((4 * Math.PI * (2 * wave + 1)) / candidate.massGeV ** 2) * Math.sqrt(x / Math.PI)
   if (rate <= limit) return []
-  const message = 'The annihilation cross-section at freeze-out is above what unitarity allows one partial wave.'
+  const message =
+    'The annihilation cross-section at freeze-out is above what unitarity allows one partial wave.'
   const inCm3PerS = (value: number): number => value / GEV_MINUS2_PER_CM3_S
-  return [raise('unitarity', message, inCm3PerS(rate), inCm3PerS(limit), 'cm³/s', 'Griest & Kamionkowski, Phys. Rev. Lett. 64 (1990) 615')]
+  return [
+    raise(
+      'unitarity',
+      message,
+      inCm3PerS(rate),
+      inCm3PerS(limit),
+      'cm³/s',
+      'Griest & Kamionkowski, Phys. Rev. Lett. 64 (1990) 615',
+    ),
+  ]
 }
 
 /** Guards on x_f. */
@@ -30,7 +42,8 @@ function freezeOutTemperatureGuards(candidate: FreezeOutInput, x: number): Guard
   }
   const temperature = candidate.massGeV / x
   if (temperature < 1e-3) {
-    const message = 'It freezes out after nucleosynthesis began: its annihilation can change the light elements.'
+    const message =
+      'It freezes out after nucleosynthesis began: its annihilation can change the light elements.'
     guards.push(raise('late-annihilation', message, temperature, 1e-3, 'GeV', COMMON_PRACTICE))
   }
   return guards
@@ -45,15 +58,19 @@ function kineticEquilibrium({ annihilation, massGeV }: FreezeOutInput): Guard[] 
     const ratio = annihilation.widthGeV / annihilation.massGeV
     const distance = Math.abs(annihilation.massGeV / (2 * massGeV) - 1)
     if (ratio > NARROW || distance > 0.3) return []
-    const message = 'A narrow resonance near threshold: elastic scattering may not keep the candidate at the bath’s temperature.'
+    const message =
+      'A narrow resonance near threshold: elastic scattering may not keep the candidate at the bath’s temperature.'
     return [raise('kinetic-equilibrium', message, ratio, NARROW, 'Γ/M', source)]
   }
   if (annihilation.kind === 'sommerfeld' && annihilation.mediatorMassGeV !== undefined) {
     // Bound states at threshold of the Hulthén potential: 6αm/(π²m_φ) = n².
-    const level = Math.sqrt((6 * annihilation.couplingAlpha * massGeV) / (Math.PI ** 2 * annihilation.mediatorMassGeV))
+    const level = Math.sqrt(
+      (6 * annihilation.couplingAlpha * massGeV) / (Math.PI ** 2 * annihilation.mediatorMassGeV),
+    )
     const distance = Math.abs(level - Math.round(level))
     if (Math.round(level) < 1 || distance > 0.02) return []
-    const message = 'A bound state lies near threshold: kinetic equilibrium is doubtful, and unitarity caps the enhancement.'
+    const message =
+      'A bound state lies near threshold: kinetic equilibrium is doubtful, and unitarity caps the enhancement.'
     return [raise('kinetic-equilibrium', message, distance, 0.02, 'levels', source)]
   }
   return []
@@ -65,18 +82,34 @@ function extrapolation({ annihilation, massGeV }: FreezeOutInput, x: number): Gu
   const [first, last] = [annihilation.points[0]![0], annihilation.points.at(-1)![0]]
   if (at >= first && at <= last) return []
   const message = 'At freeze-out the table of ⟨σv⟩ is used outside its rows, where its end value is held.'
-  return [raise('table-extrapolated', message, at, at < first ? first : last, annihilation.against === 'x' ? 'x' : 'GeV', COMMON_PRACTICE)]
+  return [
+    raise(
+      'table-extrapolated',
+      message,
+      at,
+      at < first ? first : last,
+      annihilation.against === 'x' ? 'x' : 'GeV',
+      COMMON_PRACTICE,
+    ),
+  ]
 }
 
 /** Guards on how the problem begins. */
-function startGuards(history: ThermalHistory, candidate: FreezeOutInput, start: FreezeOutStart, solution: FreezeOut): Guard[] {
+function startGuards(
+  history: ThermalHistory,
+  candidate: FreezeOutInput,
+  start: FreezeOutStart,
+  solution: FreezeOut,
+): Guard[] {
   const guards: Guard[] = []
   if (candidate.initialAbundance === 'equilibrium' && solution.rateAtStart < 1) {
-    const message = 'At the start annihilation is slower than the expansion: nothing would have brought it into equilibrium.'
+    const message =
+      'At the start annihilation is slower than the expansion: nothing would have brought it into equilibrium.'
     guards.push(raise('never-in-equilibrium', message, solution.rateAtStart, 1, 'Γ/H', COMMON_PRACTICE))
   }
   if (history.input.maximumTemperatureGeV !== null && start.x > 10) {
-    const message = 'The maximum temperature lies close to freeze-out: the abundance rests on what is assumed at the start.'
+    const message =
+      'The maximum temperature lies close to freeze-out: the abundance rests on what is assumed at the start.'
     guards.push(raise('start-near-freeze-out', message, start.x, 10, 'm/T_max', COMMON_PRACTICE))
   }
   return guards
@@ -94,6 +127,14 @@ export function freezeOutGuards(
   const atFreezeOut =
     x === null
       ? []
-      : [...unitarity(candidate, x, state.particle.rate.at(x)), ...freezeOutTemperatureGuards(candidate, x), ...extrapolation(candidate, x)]
-  return [...atFreezeOut, ...startGuards(history, candidate, start, solution), ...kineticEquilibrium(candidate)]
+      : [
+          ...unitarity(candidate, x, state.particle.rate.at(x)),
+          ...freezeOutTemperatureGuards(candidate, x),
+          ...extrapolation(candidate, x),
+        ]
+  return [
+    ...atFreezeOut,
+    ...startGuards(history, candidate, start, solution),
+    ...kineticEquilibrium(candidate),
+  ]
 }

@@ -32,8 +32,21 @@ const TITLES = {
 
 export type GuardCode = keyof typeof TITLES
 
-const HISTORY: readonly GuardCode[] = ['fluid-too-late', 'entropy-too-late', 'reheating-too-late', 'massless-today']
-const ANNIHILATION: readonly GuardCode[] = ['unitarity', 'not-cold', 'never-in-equilibrium', 'start-near-freeze-out', 'late-annihilation', 'kinetic-equilibrium', 'table-extrapolated']
+const HISTORY: readonly GuardCode[] = [
+  'fluid-too-late',
+  'entropy-too-late',
+  'reheating-too-late',
+  'massless-today',
+]
+const ANNIHILATION: readonly GuardCode[] = [
+  'unitarity',
+  'not-cold',
+  'never-in-equilibrium',
+  'start-near-freeze-out',
+  'late-annihilation',
+  'kinetic-equilibrium',
+  'table-extrapolated',
+]
 const FREEZE_IN: readonly GuardCode[] = ['not-freeze-in', 'production-cut-off', 'structure-formation']
 
 const BY_MECHANISM: Record<Mechanism, readonly GuardCode[]> = {
@@ -51,7 +64,14 @@ export function guardsLookedAt(mechanism: Mechanism): GuardTitle[] {
 }
 
 /** A guard with the number it rests on and the limit that number is held against. */
-export const raise = (code: GuardCode, message: string, value: number, limit: number, unit: string, source: string): Guard => ({
+export const raise = (
+  code: GuardCode,
+  message: string,
+  value: number,
+  limit: number,
+  unit: string,
+  source: string,
+): Guard => ({
   code,
   message,
   value,

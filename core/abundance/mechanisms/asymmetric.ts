@@ -18,7 +18,10 @@ import type { Mechanism } from './mechanism.ts'
 function antiparticles(history: ThermalHistory, candidate: AsymmetricInput): AnnihilatingState {
   return new AnnihilatingState(history, {
     massGeV: candidate.massGeV,
-    species: annihilatingSpecies(candidate).map((species) => ({ ...species, degreesOfFreedom: species.degreesOfFreedom / 2 })),
+    species: annihilatingSpecies(candidate).map((species) => ({
+      ...species,
+      degreesOfFreedom: species.degreesOfFreedom / 2,
+    })),
     rate: annihilationRate(candidate),
     selfConjugate: true,
     asymmetry: candidate.asymmetry,
@@ -54,7 +57,9 @@ export const asymmetric: Mechanism<AsymmetricInput> = {
     state.readAll()
     samples.lnYield.forEach((lnAntiparticles, i) => {
       state.moveTo(lnX[i]!)
-      samples.lnYield[i] = Math.log(2 * Math.exp(lnAntiparticles) + candidate.asymmetry * Math.exp(state.lnDilution))
+      samples.lnYield[i] = Math.log(
+        2 * Math.exp(lnAntiparticles) + candidate.asymmetry * Math.exp(state.lnDilution),
+      )
     })
     return samples
   },

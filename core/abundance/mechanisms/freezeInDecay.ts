@@ -36,7 +36,8 @@ function sourceOf(history: ThermalHistory, candidate: FreezeInDecayInput): Freez
   if (source.hottestGeV > source.scaleGeV / 40 && source.coldestGeV > history.temperatureToday) return source
   const maximum = history.input.maximumTemperatureGeV
   const path = maximum === null ? 'candidate.parent.massGeV' : 'history.maximumTemperatureGeV'
-  const message = 'allowed: a hottest temperature above a fortieth of the parent’s mass; below it no parents are left to decay'
+  const message =
+    'allowed: a hottest temperature above a fortieth of the parent’s mass; below it no parents are left to decay'
   throw new InputError([{ path, value: maximum ?? source.scaleGeV, message }])
 }
 
@@ -44,7 +45,11 @@ function sourceOf(history: ThermalHistory, candidate: FreezeInDecayInput): Freez
 const followed = (candidate: FreezeInDecayInput): AnnihilationInput | undefined =>
   candidate.lateDecay ? candidate.parent.annihilation : undefined
 
-function parentState(history: ThermalHistory, { parent }: FreezeInDecayInput, annihilation: AnnihilationInput): AnnihilatingState {
+function parentState(
+  history: ThermalHistory,
+  { parent }: FreezeInDecayInput,
+  annihilation: AnnihilationInput,
+): AnnihilatingState {
   const { massGeV, degreesOfFreedom, statistics, selfConjugate } = parent
   return new AnnihilatingState(history, {
     massGeV,
@@ -63,7 +68,12 @@ function decayed(candidate: FreezeInDecayInput, state: AnnihilatingState, effort
 }
 
 /** The parent through its own freeze-out and decay, and the two limits beside it. */
-function throughFreezeOut(history: ThermalHistory, candidate: FreezeInDecayInput, annihilation: AnnihilationInput, source: FreezeInSource): AbundanceResult {
+function throughFreezeOut(
+  history: ThermalHistory,
+  candidate: FreezeInDecayInput,
+  annihilation: AnnihilationInput,
+  source: FreezeInSource,
+): AbundanceResult {
   const state = parentState(history, candidate, annihilation)
   const width = widthOf(candidate)
   const result = checked(
@@ -72,12 +82,18 @@ function throughFreezeOut(history: ThermalHistory, candidate: FreezeInDecayInput
     (found) => found.yieldToday,
     (i) => history.tableError + LEFT_OF_TOLERANCE * EFFORTS[i]!.tolerance,
   )
-  const stable = checkedFreezeOut(history, state, { x: startX(history, candidate.parent), initialAbundance: 'equilibrium' }).value
+  const stable = checkedFreezeOut(history, state, {
+    x: startX(history, candidate.parent),
+    initialAbundance: 'equilibrium',
+  }).value
   const facts = stable.freezeOutX === null ? {} : factsAtFreezeOut(state, stable.freezeOutX)
   const point = emptyExpansion()
   if (stable.freezeOutX !== null) history.at(state.lnMass - Math.log(stable.freezeOutX), point)
   const widthOverHubble = stable.freezeOutX === null ? undefined : width / point.hubble
-  const common = freezeInResult(history, candidate, source, { value: result.value.yieldToday, error: result.error })
+  const common = freezeInResult(history, candidate, source, {
+    value: result.value.yieldToday,
+    error: result.error,
+  })
   return {
     ...common,
     yieldFreezeIn: checkedFreezeIn(history, source).value,
@@ -94,12 +110,17 @@ function throughFreezeOut(history: ThermalHistory, candidate: FreezeInDecayInput
 }
 
 /** The parent in equilibrium throughout. */
-function fromEquilibrium(history: ThermalHistory, candidate: FreezeInDecayInput, source: FreezeInSource): AbundanceResult {
+function fromEquilibrium(
+  history: ThermalHistory,
+  candidate: FreezeInDecayInput,
+  source: FreezeInSource,
+): AbundanceResult {
   const width = widthOf(candidate)
   const result = candidate.backReaction
     ? checked(
         BACK_REACTION_TOLERANCES.length,
-        (i) => solveWithBackReaction(history, source, candidate, candidate.perDecay, BACK_REACTION_TOLERANCES[i]!),
+        (i) =>
+          solveWithBackReaction(history, source, candidate, candidate.perDecay, BACK_REACTION_TOLERANCES[i]!),
         (found) => found,
         (i) => history.tableError + LEFT_OF_TOLERANCE * BACK_REACTION_TOLERANCES[i]!,
       )
@@ -120,7 +141,9 @@ export const freezeInDecay: Mechanism<FreezeInDecayInput> = {
   abundance(history, candidate) {
     const source = sourceOf(history, candidate)
     const annihilation = followed(candidate)
-    const result = annihilation ? throughFreezeOut(history, candidate, annihilation, source) : fromEquilibrium(history, candidate, source)
+    const result = annihilation
+      ? throughFreezeOut(history, candidate, annihilation, source)
+      : fromEquilibrium(history, candidate, source)
     const width = widthOf(candidate)
     return { ...result, lifetimeS: HBAR_GEV_S / width, widthGeV: width }
   },
@@ -129,8 +152,23 @@ export const freezeInDecay: Mechanism<FreezeInDecayInput> = {
     const samples = emptySamples(lnX)
     const source = sourceOf(history, candidate)
     const annihilation = followed(candidate)
-    if (annihilation) solveDecayingParent(parentState(history, candidate, annihilation), widthOf(candidate), candidate.perDecay, EFFORTS[1]!, samples)
-    else if (candidate.backReaction) solveWithBackReaction(history, source, candidate, candidate.perDecay, BACK_REACTION_TOLERANCES[1]!, samples)
+    if (annihilation)
+      solveDecayingParent(
+        parentState(history, candidate, annihilation),
+        widthOf(candidate),
+        candidate.perDecay,
+        EFFORTS[1]!,
+        samples,
+      )
+    else if (candidate.backReaction)
+      solveWithBackReaction(
+        history,
+        source,
+        candidate,
+        candidate.perDecay,
+        BACK_REACTION_TOLERANCES[1]!,
+        samples,
+      )
     else solveFreezeIn(history, source, FREEZE_IN_RULES[1]!, samples)
     return samples
   },

@@ -23,10 +23,16 @@ export function checkedFreezeIn(history: ThermalHistory, source: FreezeInSource)
 }
 
 /** Y_eq of a candidate at temperature T, GeV. */
-export function equilibriumYield(history: ThermalHistory, candidate: EquilibriumSpecies, temperatureGeV: number): number {
+export function equilibriumYield(
+  history: ThermalHistory,
+  candidate: EquilibriumSpecies,
+  temperatureGeV: number,
+): number {
   const point = emptyExpansion()
   history.at(Math.log(temperatureGeV), point)
-  return Math.exp(logEquilibriumYield([candidate], candidate.massGeV, candidate.massGeV / temperatureGeV, point.gS))
+  return Math.exp(
+    logEquilibriumYield([candidate], candidate.massGeV, candidate.massGeV / temperatureGeV, point.gS),
+  )
 }
 
 /** The fields common to every freeze-in result. */
@@ -56,11 +62,17 @@ export function freezeInResult(
 }
 
 /** γ/(n_eq H): production per candidate in equilibrium, against the expansion. */
-export function productionOverHubble(history: ThermalHistory, candidate: EquilibriumSpecies, source: FreezeInSource): (temperatureGeV: number) => number {
+export function productionOverHubble(
+  history: ThermalHistory,
+  candidate: EquilibriumSpecies,
+  source: FreezeInSource,
+): (temperatureGeV: number) => number {
   const point = emptyExpansion()
   return (temperature) => {
     history.at(Math.log(temperature), point)
-    const yieldThere = Math.exp(logEquilibriumYield([candidate], candidate.massGeV, candidate.massGeV / temperature, point.gS))
+    const yieldThere = Math.exp(
+      logEquilibriumYield([candidate], candidate.massGeV, candidate.massGeV / temperature, point.gS),
+    )
     return source.reactionDensity(temperature) / (yieldThere * point.entropy * point.hubble)
   }
 }

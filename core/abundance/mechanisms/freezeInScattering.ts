@@ -31,5 +31,6 @@ export const freezeInScattering: Mechanism<FreezeInScatteringInput> = {
   },
   scaleGeV: (history, candidate) => sourceOf(history, candidate).scaleGeV,
   equilibrium: (candidate) => ({ of: 'candidate', species: [candidate] }),
-  rateOverHubble: (history, candidate) => productionOverHubble(history, candidate, sourceOf(history, candidate)),
+  rateOverHubble: (history, candidate) =>
+    productionOverHubble(history, candidate, sourceOf(history, candidate)),
 }

@@ -12,9 +12,21 @@ import type { Mechanism } from './mechanism.ts'
 function sourceOf(history: ThermalHistory, candidate: FreezeInUltravioletInput): FreezeInSource {
   const maximum = history.input.maximumTemperatureGeV
   if (maximum === null)
-    throw new InputError([{ path: 'history.maximumTemperatureGeV', value: null, message: 'needed: ultraviolet freeze-in grows with the highest temperature without end' }])
+    throw new InputError([
+      {
+        path: 'history.maximumTemperatureGeV',
+        value: null,
+        message: 'needed: ultraviolet freeze-in grows with the highest temperature without end',
+      },
+    ])
   if (maximum < 100 * history.temperatureToday)
-    throw new InputError([{ path: 'history.maximumTemperatureGeV', value: maximum, message: 'allowed: well above today’s temperature' }])
+    throw new InputError([
+      {
+        path: 'history.maximumTemperatureGeV',
+        value: maximum,
+        message: 'allowed: well above today’s temperature',
+      },
+    ])
   return ultravioletSource(history, candidate)
 }
 
@@ -31,5 +43,6 @@ export const freezeInUltraviolet: Mechanism<FreezeInUltravioletInput> = {
   },
   scaleGeV: (history, candidate) => sourceOf(history, candidate).scaleGeV,
   equilibrium: (candidate) => ({ of: 'candidate', species: [candidate] }),
-  rateOverHubble: (history, candidate) => productionOverHubble(history, candidate, sourceOf(history, candidate)),
+  rateOverHubble: (history, candidate) =>
+    productionOverHubble(history, candidate, sourceOf(history, candidate)),
 }

@@ -20,7 +20,12 @@ import { emptySamples } from '../yieldSamples.ts'
 import type { Mechanism } from './mechanism.ts'
 
 /** The species that share the annihilation: the candidate, and those it coannihilates with. */
-export function annihilatingSpecies(candidate: Pick<FreezeOutInput, 'massGeV' | 'degreesOfFreedom' | 'statistics' | 'annihilation' | 'equilibriumStatistics'>): EquilibriumSpecies[] {
+export function annihilatingSpecies(
+  candidate: Pick<
+    FreezeOutInput,
+    'massGeV' | 'degreesOfFreedom' | 'statistics' | 'annihilation' | 'equilibriumStatistics'
+  >,
+): EquilibriumSpecies[] {
   const others = candidate.annihilation.kind === 'coannihilation' ? candidate.annihilation.others : []
   const boltzmann = candidate.equilibriumStatistics === 'maxwell-boltzmann'
   return [candidate, ...others].map(({ massGeV, degreesOfFreedom, statistics }) => ({
@@ -41,14 +46,19 @@ export function annihilatingState(history: ThermalHistory, candidate: FreezeOutI
 }
 
 /** Where the integration may begin: x = 1 or `startX`, or the maximum temperature when that is colder. */
-export function startX(history: ThermalHistory, candidate: { massGeV: number; startX?: number | undefined }): number {
+export function startX(
+  history: ThermalHistory,
+  candidate: { massGeV: number; startX?: number | undefined },
+): number {
   const maximum = history.input.maximumTemperatureGeV
   const x = Math.max(candidate.startX ?? 1, maximum === null ? 0 : candidate.massGeV / maximum)
   const refuse = (message: string): never => {
     throw new InputError([{ path: 'candidate.massGeV', value: candidate.massGeV, message }])
   }
-  if (candidate.massGeV / x > HOTTEST_GEV) refuse(`allowed: at most ${HOTTEST_GEV * x} GeV, where the bath's tables end`)
-  if (candidate.massGeV / x <= history.temperatureToday * 1.01) refuse('allowed: a mass that starts the calculation above today’s temperature')
+  if (candidate.massGeV / x > HOTTEST_GEV)
+    refuse(`allowed: at most ${HOTTEST_GEV * x} GeV, where the bath's tables end`)
+  if (candidate.massGeV / x <= history.temperatureToday * 1.01)
+    refuse('allowed: a mass that starts the calculation above today’s temperature')
   return x
 }
 
@@ -62,7 +72,8 @@ function rateEqualsHubble(state: AnnihilatingState, fromX: number): number | und
   const excess = (lnX: number): number => Math.log(state.rateOverHubble(lnX))
   const early = Math.log(fromX)
   for (let lnX = early; lnX < early + 1.4; lnX += 0.05) {
-    if (excess(lnX) > 0 && excess(lnX + 0.05) <= 0) return Math.exp(state.lnMass - brent(excess, lnX, lnX + 0.05, 1e-12))
+    if (excess(lnX) > 0 && excess(lnX + 0.05) <= 0)
+      return Math.exp(state.lnMass - brent(excess, lnX, lnX + 0.05, 1e-12))
   }
   return undefined
 }
@@ -82,7 +93,11 @@ export function factsAtFreezeOut(state: AnnihilatingState, x: number): Partial<A
 }
 
 /** Solves with rising effort until two agree. */
-export function checkedFreezeOut(history: ThermalHistory, state: AnnihilatingState, start: FreezeOutStart): { value: FreezeOut; error: number } {
+export function checkedFreezeOut(
+  history: ThermalHistory,
+  state: AnnihilatingState,
+  start: FreezeOutStart,
+): { value: FreezeOut; error: number } {
   return checked(
     EFFORTS.length,
     (i) => solveFreezeOut(state, start, EFFORTS[i]!),

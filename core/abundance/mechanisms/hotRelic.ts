@@ -11,14 +11,26 @@ import { emptySamples } from '../yieldSamples.ts'
 import type { Mechanism } from './mechanism.ts'
 
 /** ln Y at decoupling, and ln of what entropy dilutes it by afterwards. */
-function atDecoupling(history: ThermalHistory, candidate: HotRelicInput): { lnYield: number; lnDilution: number } {
+function atDecoupling(
+  history: ThermalHistory,
+  candidate: HotRelicInput,
+): { lnYield: number; lnDilution: number } {
   const { decouplingTemperatureGeV: decoupling } = candidate
   const maximum = history.input.maximumTemperatureGeV
   if (maximum !== null && decoupling > maximum)
-    throw new InputError([{ path: 'candidate.decouplingTemperatureGeV', value: decoupling, message: `allowed: at most the maximum temperature, ${maximum} GeV` }])
+    throw new InputError([
+      {
+        path: 'candidate.decouplingTemperatureGeV',
+        value: decoupling,
+        message: `allowed: at most the maximum temperature, ${maximum} GeV`,
+      },
+    ])
   const point = emptyExpansion()
   history.at(Math.log(decoupling), point)
-  return { lnYield: logEquilibriumYield([candidate], candidate.massGeV, candidate.massGeV / decoupling, point.gS), lnDilution: point.lnDilution }
+  return {
+    lnYield: logEquilibriumYield([candidate], candidate.massGeV, candidate.massGeV / decoupling, point.gS),
+    lnDilution: point.lnDilution,
+  }
 }
 
 /** Rounding, and the interpolation of n_eq. */
@@ -54,5 +66,6 @@ export const hotRelic: Mechanism<HotRelicInput> = {
   scaleGeV: (_history, candidate) => candidate.massGeV,
   equilibrium: (candidate) => ({ of: 'candidate', species: [candidate] }),
   // No interaction is given, only where it ended: the rate is taken to fall as T⁵ against H as T², as for weak interactions.
-  rateOverHubble: (_history, candidate) => (temperature) => (temperature / candidate.decouplingTemperatureGeV) ** 3,
+  rateOverHubble: (_history, candidate) => (temperature) =>
+    (temperature / candidate.decouplingTemperatureGeV) ** 3,
 }

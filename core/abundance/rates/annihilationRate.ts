@@ -43,7 +43,10 @@ function resonant(candidate: AnnihilatingCandidate, resonance: Of<'resonance'>):
   return (x) => resonanceAverage(x, pole)
 }
 
-function enhanced(massGeV: number, { sWaveCm3PerS, couplingAlpha: alpha, mediatorMassGeV }: Of<'sommerfeld'>): (x: number) => number {
+function enhanced(
+  massGeV: number,
+  { sWaveCm3PerS, couplingAlpha: alpha, mediatorMassGeV }: Of<'sommerfeld'>,
+): (x: number) => number {
   const bare = sWaveCm3PerS * GEV_MINUS2_PER_CM3_S
   if (mediatorMassGeV === undefined) return (x) => bare * maxwellAverage(x, (v) => coulombFactor(v, alpha))
   const epsilon = (Math.PI ** 2 * mediatorMassGeV) / (6 * alpha * massGeV)
@@ -70,7 +73,10 @@ function coannihilating(candidate: AnnihilatingCandidate, input: Of<'coannihilat
 
 function buildRate(candidate: AnnihilatingCandidate): AnnihilationRate {
   const { annihilation, massGeV } = candidate
-  const averaged = (f: (x: number) => number): AnnihilationRate => ({ at: lazyPositive(f, AVERAGE_TOLERANCE), breaks: [] })
+  const averaged = (f: (x: number) => number): AnnihilationRate => ({
+    at: lazyPositive(f, AVERAGE_TOLERANCE),
+    breaks: [],
+  })
   switch (annihilation.kind) {
     case 'partial-waves': {
       // ⟨σv⟩ = a + 6b/x to leading order: Gondolo & Gelmini, Nucl. Phys. B 360 (1991) 145.
@@ -104,5 +110,7 @@ const memo = new LeastRecentlyUsed<AnnihilationRate>(32)
 export function annihilationRate(candidate: AnnihilatingCandidate): AnnihilationRate {
   const { massGeV, degreesOfFreedom, selfConjugate, annihilation } = candidate
   if (annihilation.kind === 'partial-waves' || annihilation.kind === 'power-law') return buildRate(candidate)
-  return memo.get(JSON.stringify([massGeV, degreesOfFreedom, selfConjugate, annihilation]), () => buildRate(candidate))
+  return memo.get(JSON.stringify([massGeV, degreesOfFreedom, selfConjugate, annihilation]), () =>
+    buildRate(candidate),
+  )
 }

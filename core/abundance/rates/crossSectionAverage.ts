@@ -18,7 +18,12 @@ const CUTS = [0.03, 0.3, 1, 2.5, 5, 9, 14, 20, 28, 38, 50, 64]
  * @param sigma cross-section, GeV⁻², as a function of √s, GeV
  * @param knots values of √s where a derivative of σ jumps, and the ends of its support
  */
-export function crossSectionAverage(x: number, massGeV: number, sigma: (rootS: number) => number, knots: readonly number[]): number {
+export function crossSectionAverage(
+  x: number,
+  massGeV: number,
+  sigma: (rootS: number) => number,
+  knots: readonly number[],
+): number {
   const temperature = massGeV / x
   const scaledKnots = knots.map((knot) => (knot - 2 * massGeV) / temperature)
   const low = Math.max(0, scaledKnots.length > 0 ? Math.min(...scaledKnots) : 0)

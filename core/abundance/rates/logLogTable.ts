@@ -6,7 +6,10 @@ export interface LogLogTable {
 
 /** @param points [x, y] with x ascending and both positive */
 export function logLogTable(points: readonly (readonly [number, number])[]): LogLogTable {
-  return { lnX: Float64Array.from(points, (point) => Math.log(point[0])), lnY: Float64Array.from(points, (point) => Math.log(point[1])) }
+  return {
+    lnX: Float64Array.from(points, (point) => Math.log(point[0])),
+    lnY: Float64Array.from(points, (point) => Math.log(point[1])),
+  }
 }
 
 /** Room for rounding at the ends of the table. */

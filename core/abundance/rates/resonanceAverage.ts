@@ -32,7 +32,10 @@ export interface Resonance {
 }
 
 /** ⟨σv⟩, GeV⁻², at x = m/T. */
-export function resonanceAverage(x: number, { candidateGeV: m, massGeV, widthGeV, strength }: Resonance): number {
+export function resonanceAverage(
+  x: number,
+  { candidateGeV: m, massGeV, widthGeV, strength }: Resonance,
+): number {
   // Everything in units of the candidate's mass.
   const pole = (massGeV / m) ** 2
   const width = (massGeV / m) * (widthGeV / m)
@@ -48,7 +51,12 @@ export function resonanceAverage(x: number, { candidateGeV: m, massGeV, widthGeV
 
   const near = (from: number, to: number): number => {
     const angle = (s: number): number => Math.atan2(s - pole, width)
-    return integrateWith(RULE, (theta) => width * body(pole + width * Math.tan(theta)), angle(from), angle(to))
+    return integrateWith(
+      RULE,
+      (theta) => width * body(pole + width * Math.tan(theta)),
+      angle(from),
+      angle(to),
+    )
   }
   const side = (sign: 1 | -1, from: number, to: number): number =>
     integrateWith(
@@ -79,7 +87,11 @@ export function resonanceAverage(x: number, { candidateGeV: m, massGeV, widthGeV
 /** Ascending cuts inside (low, high) with both ends; empty when there is nothing between them. */
 function cutUp(low: number, high: number, cuts: readonly number[]): number[] {
   if (!(high > low)) return []
-  return [low, ...cuts.filter((cut) => cut > low * (1 + 1e-12) && cut < high * (1 - 1e-12)).sort((a, b) => a - b), high]
+  return [
+    low,
+    ...cuts.filter((cut) => cut > low * (1 + 1e-12) && cut < high * (1 - 1e-12)).sort((a, b) => a - b),
+    high,
+  ]
 }
 
 function doublings(first: number, last: number): number[] {

@@ -46,14 +46,23 @@ export function scaledScatteringRate(
   const integrand = (y: number): number => {
     const rootS = leastRootS + y * T
     const s = rootS * rootS
-    return sigma(rootS) * (s - sum2) * (s - difference2) * quickScaledBesselK(1, rootS / T) * Math.exp(-y) * 2 * T
+    return (
+      sigma(rootS) * (s - sum2) * (s - difference2) * quickScaledBesselK(1, rootS / T) * Math.exp(-y) * 2 * T
+    )
   }
   const edges = edgesWithin(low, high, [...CUTS, ...doublings(leastRootS / T), ...scaledKnots])
-  return ((one.degreesOfFreedom * two.degreesOfFreedom * T) / (32 * Math.PI ** 4)) * panelIntegral(integrand, edges)
+  return (
+    ((one.degreesOfFreedom * two.degreesOfFreedom * T) / (32 * Math.PI ** 4)) *
+    panelIntegral(integrand, edges)
+  )
 }
 
 /** γ, GeV⁴, of a constant |M|². */
-export function constantMatrixElementRate(temperatureGeV: number, massGeV: number, matrixElementSquared: number): number {
+export function constantMatrixElementRate(
+  temperatureGeV: number,
+  massGeV: number,
+  matrixElementSquared: number,
+): number {
   const x = massGeV / temperatureGeV
   const bessel = quickScaledBesselK(1, x) * Math.exp(-x)
   return (matrixElementSquared * massGeV * temperatureGeV ** 3 * bessel) / (128 * Math.PI ** 5)

@@ -140,7 +140,8 @@ function eraFromStart(input: EarlyMatterInput, radiation: Radiation, start: numb
 
 /** The start temperature that gives the wanted dilution; the dilution grows with it. */
 function startForDilution(input: EarlyMatterInput, radiation: Radiation, dilution: number): number {
-  const excess = (lnStart: number): number => Math.log(eraFromStart(input, radiation, Math.exp(lnStart)).dilution / dilution)
+  const excess = (lnStart: number): number =>
+    Math.log(eraFromStart(input, radiation, Math.exp(lnStart)).dilution / dilution)
   // D ≈ T_start/T_RH up to a factor of order one, for matter that dominates.
   const guess = Math.log(input.reheatTemperatureGeV * dilution)
   return Math.exp(brent(excess, guess - 4, Math.min(guess + 4, Math.log(HOTTEST_GEV) - 1), 1e-11))

@@ -3,7 +3,10 @@ import type { ExpansionInput } from '../../wire/history.ts'
 import { RADIATION } from './expansion.ts'
 import type { Expansion } from './expansion.ts'
 
-export function entropyStep({ temperatureGeV, factor }: Extract<ExpansionInput, { kind: 'entropy-step' }>): Expansion {
+export function entropyStep({
+  temperatureGeV,
+  factor,
+}: Extract<ExpansionInput, { kind: 'entropy-step' }>): Expansion {
   const lnReleased = Math.log(factor)
   const lnStep = Math.log(temperatureGeV)
   return {

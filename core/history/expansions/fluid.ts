@@ -13,7 +13,10 @@ import type { Radiation } from '../radiation.ts'
 import { RADIATION } from './expansion.ts'
 import type { Expansion } from './expansion.ts'
 
-export function fluid(expansion: Extract<ExpansionInput, { kind: 'fluid' }>, radiation: Radiation): Expansion {
+export function fluid(
+  expansion: Extract<ExpansionInput, { kind: 'fluid' }>,
+  radiation: Radiation,
+): Expansion {
   const { index, equalityTemperatureGeV: equality } = expansion
   const there = emptyPoint()
   const apart = { gRho: 0, gP: 0 }
@@ -25,7 +28,8 @@ export function fluid(expansion: Extract<ExpansionInput, { kind: 'fluid' }>, rad
     earlyIndex: index,
     radiationOnly: () => false,
     complete(_lnT, out) {
-      out.otherEnergy = density * (out.gS / there.gS) ** ((4 + index) / 3) * (out.temperature / equality) ** (4 + index)
+      out.otherEnergy =
+        density * (out.gS / there.gS) ** ((4 + index) / 3) * (out.temperature / equality) ** (4 + index)
       out.otherPressure = ((1 + index) / 3) * out.otherEnergy
       out.energy += out.otherEnergy
       out.hubble = hubbleOf(out.energy)

@@ -19,7 +19,13 @@ export function lazyPositive(f: (x: number) => number, tolerance: number): (x: n
     let cell = cells.get(index)
     if (!cell) {
       const low = index * CELL
-      cell = tabulate((at, out) => (out[0] = Math.log(Math.max(f(Math.exp(at)), NOTHING))), 1, low, low + CELL, { tolerance, maximumDepth: 5 })
+      cell = tabulate(
+        (at, out) => (out[0] = Math.log(Math.max(f(Math.exp(at)), NOTHING))),
+        1,
+        low,
+        low + CELL,
+        { tolerance, maximumDepth: 5 },
+      )
       cells.set(index, cell)
     }
     return Math.exp(evaluateColumn(cell, 0, lnX))

@@ -30,19 +30,35 @@ export class OdeFailure extends Error {
 /** Distance from a break, relative to its size, at which the equations are asked on either side of it. */
 const EDGE = 1e-13
 
-function solveTo(problem: OdeProblem, from: number, y: ArrayLike<number>, to: number, tolerance: number, pieces: Piece[]): Float64Array {
+function solveTo(
+  problem: OdeProblem,
+  from: number,
+  y: ArrayLike<number>,
+  to: number,
+  tolerance: number,
+  pieces: Piece[],
+): Float64Array {
   const low = Math.min(from, to)
   const high = Math.max(from, to)
-  const inside = (t: number): number => Math.min(Math.max(t, low + EDGE * Math.max(1, Math.abs(low))), high - EDGE * Math.max(1, Math.abs(high)))
+  const inside = (t: number): number =>
+    Math.min(Math.max(t, low + EDGE * Math.max(1, Math.abs(low))), high - EDGE * Math.max(1, Math.abs(high)))
   const solution = solveOde(
-    { dimension: problem.dimension, evaluate: (t, state, slope, jacobian) => problem.evaluate(inside(t), state, slope, jacobian) },
+    {
+      dimension: problem.dimension,
+      evaluate: (t, state, slope, jacobian) => problem.evaluate(inside(t), state, slope, jacobian),
+    },
     from,
     y,
     to,
     {
       absoluteTolerance: tolerance,
       firstStep: Math.min(0.05, high - low),
-      onStep: (step) => void pieces.push({ low: Math.min(step.from, step.to), high: Math.max(step.from, step.to), at: step.polynomial() }),
+      onStep: (step) =>
+        void pieces.push({
+          low: Math.min(step.from, step.to),
+          high: Math.max(step.from, step.to),
+          at: step.polynomial(),
+        }),
     },
   )
   if (solution.status === 'failed') throw new OdeFailure(solution.reason, solution.t)
@@ -63,7 +79,8 @@ export function denseOde(
   tolerance: number,
 ): DenseSolution {
   const pieces: Piece[] = []
-  const inner = (a: number, b: number): number[] => breaks.filter((t) => t > a + 1e-12 && t < b - 1e-12).sort((x, z) => x - z)
+  const inner = (a: number, b: number): number[] =>
+    breaks.filter((t) => t > a + 1e-12 && t < b - 1e-12).sort((x, z) => x - z)
   const follow = (ends: readonly number[]): void => {
     let from = t0
     let y: ArrayLike<number> = y0

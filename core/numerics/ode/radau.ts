@@ -78,7 +78,12 @@ class Integration implements OdeStep {
   polynomial(): (t: number, component: number) => number {
     const { tableau } = this
     const n = this.problem.dimension
-    const kept = { from: this.from, to: this.to, start: this.start.slice(), increments: this.increments.slice() }
+    const kept = {
+      from: this.from,
+      to: this.to,
+      start: this.start.slice(),
+      increments: this.increments.slice(),
+    }
     return (t, component) => valueAt(tableau, kept, t, component, n)
   }
 

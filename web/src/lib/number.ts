@@ -11,15 +11,19 @@ export function numberParts(value: number, digits: number): NumberParts {
   const size = Math.abs(value)
   if (size >= 1e-3 && size < 1e5) return { mantissa: plain(value, digits), exponent: null }
   const [mantissa, power] = value.toExponential(digits - 1).split('e')
-  return { mantissa: trimZeros(mantissa!), exponent: Number(power) }
+  return { mantissa: trimmedIfExact(`${mantissa}`, value / 10 ** Number(power)), exponent: Number(power) }
 }
 
 function plain(value: number, digits: number): string {
   const decimals = Math.max(0, digits - 1 - Math.floor(Math.log10(Math.abs(value))))
-  return trimZeros(value.toFixed(Math.min(decimals, 20)))
+  return trimmedIfExact(value.toFixed(Math.min(decimals, 20)), value)
 }
 
-const trimZeros = (text: string): string => (text.includes('.') ? text.replace(/\.?0+$/, '') : text)
+/** 100 rather than 100.0 for a number that is exactly that; the zeros of a rounded number are digits, and stay. */
+function trimmedIfExact(text: string, value: number): string {
+  const exact = Math.abs(Number(text) - value) <= 4 * Number.EPSILON * Math.abs(value)
+  return exact && text.includes('.') ? text.replace(/\.?0+$/, '') : text
+}
 
 /** Significant digits that a relative error leaves meaningful, between 2 and `most`. */
 export function meaningfulDigits(relativeError: number, most: number): number {

@@ -1,23 +1,40 @@
 import { numberParts } from '../../lib/number.ts'
 import { temperatureText } from '../../lib/temperature.ts'
 
-/** A number in SVG text: 10⁻⁴ with its power as a superscript. */
+/** A number in SVG text: 0.01 to 9999 written out, else the power of ten, 10⁻⁴, with its power as a superscript. */
 export function TickNumber({ value }: { value: number }) {
-  const { mantissa, exponent } =
-    value >= 1e-2 && value < 1e4
-      ? numberParts(value, 3)
-      : { mantissa: '1', exponent: Math.round(Math.log10(value)) }
-  if (exponent === null) return <>{mantissa.replace('-', '−')}</>
+  const size = Math.abs(value)
+  if (size === 0 || (size >= 1e-2 && size < 1e4))
+    return <>{numberParts(value, 3).mantissa.replace('-', '−')}</>
+  const power = Math.floor(Math.log10(size) + 1e-9)
+  const mantissa = Number((value / 10 ** power).toPrecision(3))
   return (
     <>
-      10
-      <tspan dy="-0.45em" fontSize="0.72em">
-        {String(exponent).replace('-', '−')}
-      </tspan>
+      {mantissa === 1 ? '10' : `${String(mantissa).replace('-', '−')} × 10`}
+      <Superscript>{power}</Superscript>
     </>
   )
 }
 
-/** A temperature on an axis; powers of ten beyond the named units. */
-export const temperatureTick = (temperatureGeV: number): string =>
-  temperatureGeV >= 1e6 ? `1e${Math.round(Math.log10(temperatureGeV))} GeV` : temperatureText(temperatureGeV)
+/** Above this, GeV, a unit no longer helps and the power of ten is written. */
+const BEYOND_UNITS = 1e6
+
+/** A temperature in SVG text: 100 GeV, 1 MeV; beyond the units 10⁷ GeV. */
+export function TemperatureTick({ temperatureGeV }: { temperatureGeV: number }) {
+  if (temperatureGeV < BEYOND_UNITS) return <>{temperatureText(temperatureGeV)}</>
+  return (
+    <>
+      <TickNumber value={temperatureGeV} />
+      <tspan dy="0.32em"> GeV</tspan>
+    </>
+  )
+}
+
+/** Raised by its own em, which is why what follows in the same text comes down by less of its own. */
+function Superscript({ children }: { children: number }) {
+  return (
+    <tspan dy="-0.45em" fontSize="0.72em">
+      {String(children).replace('-', '−')}
+    </tspan>
+  )
+}

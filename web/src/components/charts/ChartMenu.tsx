@@ -1,5 +1,5 @@
 import type { RefObject } from 'react'
-import type { Series } from './LineChart.tsx'
+import type { Series } from './series.ts'
 import { saveCsv, savePng, saveSvg } from './exportChart.ts'
 
 interface ChartMenuProps {

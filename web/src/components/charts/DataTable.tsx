@@ -1,5 +1,5 @@
 import { Num } from '../ui/Num.tsx'
-import type { Series } from './LineChart.tsx'
+import type { Series } from './series.ts'
 import { valueAtTemperature } from './curvePath.ts'
 
 const MOST_ROWS = 36
@@ -13,9 +13,11 @@ export function DataTable({ series }: { series: readonly Series[] }) {
       <table className="w-full text-small">
         <thead className="sticky top-0 bg-paper text-left text-soft">
           <tr>
-            <th className="pr-4 font-normal">T</th>
+            <th scope="col" className="pr-4 font-normal">
+              <i className="font-serif">T</i>
+            </th>
             {series.map((each) => (
-              <th key={each.id} className="pr-4 font-normal">
+              <th key={each.id} scope="col" className="pr-4 font-normal">
                 {each.name}
               </th>
             ))}
@@ -24,8 +26,8 @@ export function DataTable({ series }: { series: readonly Series[] }) {
         <tbody className="rows">
           {grid
             .filter((_temperature, i) => i % every === 0)
-            .map((temperature) => (
-              <tr key={temperature}>
+            .map((temperature, row) => (
+              <tr key={row}>
                 <td className="py-0.5 pr-4">
                   <Num value={temperature} unit="GeV" />
                 </td>

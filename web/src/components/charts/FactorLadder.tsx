@@ -1,54 +1,33 @@
-import { Num } from '../ui/Num.tsx'
-import { logTicks, position } from './scale.ts'
+import { TickNumber } from './AxisLabels.tsx'
+import { ladderDomain, ladderTicks, rungs } from './ladder.ts'
+import type { Factor, Rung } from './ladder.ts'
+import { position } from './scale.ts'
 import type { AxisScale } from './scale.ts'
 import { useWidth } from './useWidth.ts'
 
-interface Factor {
-  label: string
-  /** Null where a mixed history could not be computed. */
-  factor: number | null
-}
-
 interface FactorLadderProps {
+  /** Ω_χh² of the baseline. */
   baseline: number
   factors: readonly Factor[]
+  /** Ω_χh² of this history. */
   result: number
+  /** Ω_χh² measured. */
   measured: number
-}
-
-/** One rung: from one running product to the next. */
-export interface Rung extends Factor {
-  from: number
-  to: number
-}
-
-/** The running products from the baseline, factor after factor. */
-export function rungs(baseline: number, factors: readonly Factor[]): Rung[] {
-  let at = baseline
-  return factors.map(({ label, factor }) => {
-    const from = at
-    at *= factor ?? 1
-    return { label, factor, from, to: at }
-  })
 }
 
 const ROW = 42
 const TOP = 18
+const BAR = 12
 
-/** A window on the abundance that holds everything, with room on both sides. */
-function domainOf(values: readonly number[]): [number, number] {
-  const low = Math.min(...values)
-  const high = Math.max(...values)
-  const room = Math.max(1.25, (high / low) ** 0.18)
-  return [low / room, high * room]
-}
+/** Height within a row at which dot and bar are centred, beneath the row's name. */
+const CENTRE = 28
 
-/** The digits 1, 2 and 5 of every decade inside: few enough to read. */
-const ladderTicks = (domain: [number, number]): number[] => {
-  const ticks = logTicks(domain, 8).map((tick) => tick.value)
-  const round = ticks.filter((value) => [1, 2, 5].includes(Number(value.toExponential().split('e')[0])))
-  return round.length > 5 ? round.filter((value) => value.toExponential().startsWith('1e')) : round
-}
+/** Width kept at the right for the number beside a bar, px. */
+const NUMBER_ROOM = 72
+
+const MOST_TICKS = 5
+
+type At = (value: number) => number
 
 /** From the baseline to this history on a logarithmic axis: filled where a factor raises, outlined where it lowers. */
 export function FactorLadder({ baseline, factors, result, measured }: FactorLadderProps) {
@@ -56,120 +35,154 @@ export function FactorLadder({ baseline, factors, result, measured }: FactorLadd
   const steps = rungs(baseline, factors)
   const x: AxisScale = {
     kind: 'log',
-    domain: domainOf([baseline, result, measured, ...steps.map((step) => step.to)]),
-    range: [6, Math.max(20, width - 66)],
+    domain: ladderDomain([baseline, result, measured, ...steps.map((step) => step.to)]),
+    range: [6, Math.max(20, width - NUMBER_ROOM)],
   }
-  const at = (value: number): number => position(x, value)
-  const bottom = TOP + ROW * (steps.length + 2)
+  const at: At = (value) => position(x, value)
+  const rowY = (row: number): number => TOP + ROW * row
+  const last = steps.length + 1
+  const bottom = rowY(last + 1)
+  if (width === 0) return <div ref={frame} style={{ height: bottom + 22 }} />
   return (
     <div ref={frame}>
       <svg
         width={width}
         height={bottom + 22}
         role="img"
-        aria-label={`From ${baseline.toPrecision(4)} in the baseline to ${result.toPrecision(4)}: ${factors.map(({ label, factor }) => `${label} times ${factor?.toPrecision(4) ?? 'not computable'}`).join(', ')}.`}
+        aria-label={inWords({ baseline, factors, result, measured })}
         className="block text-[12px]"
       >
-        <path d={`M${at(measured)} ${TOP}V${bottom}`} stroke="var(--good)" strokeDasharray="3 3" />
-        <text
-          x={at(measured)}
-          y={11}
-          textAnchor={at(measured) > width * 0.6 ? 'end' : 'start'}
-          fill="var(--good)"
-        >
-          measured
-        </text>
-        <Row y={TOP} label="baseline">
-          <circle cx={at(baseline)} cy={TOP + 28} r={4.5} fill="var(--ink)" />
-          <Beside x={at(baseline)} y={TOP + 28} value={baseline} width={width} />
+        <Measured x={at(measured)} bottom={bottom} width={width} />
+        {[baseline, ...steps.map((step) => step.to)].map((value, row) => (
+          <path
+            key={row}
+            d={`M${at(value)} ${rowY(row) + CENTRE}V${rowY(row + 1) + CENTRE}`}
+            stroke="var(--faint)"
+          />
+        ))}
+        <Row y={rowY(0)} label="baseline">
+          <Dot x={at(baseline)} y={rowY(0) + CENTRE} value={baseline} colour="--ink" width={width} />
         </Row>
         {steps.map((step, i) => (
-          <LadderRung key={step.label} step={step} y={TOP + ROW * (i + 1)} at={at} width={width} />
+          <Row key={step.label} y={rowY(i + 1)} label={step.label}>
+            <Bar step={step} y={rowY(i + 1) + CENTRE} at={at} width={width} />
+          </Row>
         ))}
-        <path d={`M${at(baseline)} ${TOP + 33}V${TOP + ROW + 22}`} stroke="var(--faint)" />
-        <path d={`M${at(result)} ${bottom - ROW - 6}V${bottom - 18}`} stroke="var(--faint)" />
-        <Row y={bottom - ROW} label="this history">
-          <circle cx={at(result)} cy={bottom - ROW + 28} r={4.5} fill="var(--ember)" />
-          <Beside x={at(result)} y={bottom - ROW + 28} value={result} width={width} />
+        <Row y={rowY(last)} label="this history">
+          <Dot x={at(result)} y={rowY(last) + CENTRE} value={result} colour="--ember" width={width} />
         </Row>
-        {ladderTicks([x.domain[0], x.domain[1]]).map((value) => (
-          <text key={value} x={at(value)} y={bottom + 16} textAnchor="middle" fill="var(--soft)">
-            {value >= 1e-4 && value < 1e4 ? Number(value.toPrecision(1)) : value.toExponential(0)}
-          </text>
+        {ladderTicks(x.domain, MOST_TICKS).map((value) => (
+          <g key={value} fill="var(--soft)">
+            <path d={`M${at(value)} ${bottom}v4`} stroke="var(--faint)" />
+            <text x={at(value)} y={bottom + 17} textAnchor={at(value) < 14 ? 'start' : 'middle'}>
+              <TickNumber value={value} />
+            </text>
+          </g>
         ))}
       </svg>
-      <ul className="sr-only">
-        {steps.map((step) => (
-          <li key={step.label}>
-            {step.label}: {step.factor === null ? 'not computable' : <Num value={step.factor} />}
-          </li>
-        ))}
-      </ul>
     </div>
   )
 }
 
+const inWords = ({ baseline, factors, result, measured }: FactorLadderProps): string =>
+  [
+    `From ${baseline.toPrecision(4)} in the baseline to ${result.toPrecision(4)}`,
+    ...factors.map(({ label, factor }) =>
+      factor === null ? `${label} not computable` : `${label} times ${factor.toPrecision(4)}`,
+    ),
+    `measured ${measured}`,
+  ].join('; ')
+
+function Measured({ x, bottom, width }: { x: number; bottom: number; width: number }) {
+  return (
+    <g>
+      <path d={`M${x} ${TOP}V${bottom}`} stroke="var(--series-3)" strokeDasharray="3 3" />
+      <text x={x} y={11} textAnchor={x > width * 0.6 ? 'end' : 'start'} fill="var(--series-3)">
+        measured
+      </text>
+    </g>
+  )
+}
+
+/** The name stands over the lines behind it, on a seam of paper. */
 const Row = ({ y, label, children }: { y: number; label: string; children: React.ReactNode }) => (
   <g>
-    <text x={0} y={y + 10} fill="var(--soft)">
+    <text x={0} y={y + 12} fill="var(--soft)" stroke="var(--paper)" strokeWidth={4} paintOrder="stroke">
       {label}
     </text>
     {children}
   </g>
 )
 
-/** A value beside its dot, on the side that has room. */
-function Beside({ x, y, value, width }: { x: number; y: number; value: number; width: number }) {
-  const left = x > width - 70
+interface BesideProps {
+  from: number
+  to: number
+  y: number
+  /** Width of the drawing, in which the text has to stay. */
+  width: number
+  children: string
+}
+
+/** Width of a character at 13 px, near enough. */
+const CHARACTER = 7
+
+/** A number beside what it belongs to, on the side that has room, on a seam of paper. */
+function Beside({ from, to, y, width, children }: BesideProps) {
+  const left = to + 9 + children.length * CHARACTER > width
   return (
     <text
-      x={left ? x - 9 : x + 9}
+      x={left ? from - 9 : to + 9}
       y={y}
       dy="0.34em"
       textAnchor={left ? 'end' : 'start'}
       className="font-serif text-[13px]"
       fill="var(--ink)"
+      stroke="var(--paper)"
+      strokeWidth={4}
+      paintOrder="stroke"
     >
-      {Number(value.toPrecision(3))}
+      {children}
     </text>
   )
 }
 
-function LadderRung({
-  step,
-  y,
-  at,
-  width,
-}: {
-  step: Rung
+interface DotProps {
+  x: number
   y: number
-  at: (value: number) => number
+  value: number
+  colour: string
   width: number
-}) {
-  const rises = step.to > step.from
-  const [from, to] = [Math.min(at(step.from), at(step.to)), Math.max(at(step.from), at(step.to))]
-  const size = Math.max(2, to - from)
-  const left = to > width - 74
+}
+
+function Dot({ x, y, value, colour, width }: DotProps) {
   return (
-    <Row y={y} label={step.label}>
-      <rect
-        x={from}
-        y={y + 20}
-        width={size}
-        height={12}
-        fill={rises ? 'var(--ember)' : 'none'}
-        stroke="var(--ember)"
-      />
-      <text
-        x={left ? from - 8 : to + 8}
-        y={y + 26}
-        dy="0.34em"
-        textAnchor={left ? 'end' : 'start'}
-        className="font-serif text-[13px]"
-        fill="var(--ink)"
-      >
-        {step.factor === null ? 'not computable' : `× ${Number(step.factor.toPrecision(4))}`}
-      </text>
-    </Row>
+    <>
+      <circle cx={x} cy={y} r={4.5} fill={`var(${colour})`} />
+      <Beside from={x} to={x} y={y} width={width}>
+        {String(Number(value.toPrecision(4)))}
+      </Beside>
+    </>
+  )
+}
+
+function Bar({ step, y, at, width }: { step: Rung; y: number; at: At; width: number }) {
+  const [from, to] = [Math.min(at(step.from), at(step.to)), Math.max(at(step.from), at(step.to))]
+  const known = step.factor !== null
+  return (
+    <>
+      {known ? (
+        <rect
+          x={from}
+          y={y - BAR / 2}
+          width={Math.max(2, to - from)}
+          height={BAR}
+          fill={step.to > step.from ? 'var(--ember)' : 'var(--paper)'}
+          stroke="var(--ember)"
+        />
+      ) : null}
+      <Beside from={from} to={to} y={y} width={width}>
+        {known ? `× ${Number(step.factor!.toPrecision(4))}` : 'not computable'}
+      </Beside>
+    </>
   )
 }

@@ -1,6 +1,6 @@
-import { useMemo } from 'react'
-import { TickNumber, temperatureTick } from './AxisLabels.tsx'
-import type { Mark, Series } from './LineChart.tsx'
+import { useId, useMemo } from 'react'
+import { TemperatureTick, TickNumber } from './AxisLabels.tsx'
+import type { Mark, Series } from './series.ts'
 import { pathData, stretches } from './curvePath.ts'
 import { linearTicks, logTicks, position } from './scale.ts'
 import type { AxisScale } from './scale.ts'
@@ -16,6 +16,8 @@ interface PanelProps {
   labels: boolean
   temperatureLabels: boolean
   caption?: string
+  /** Symbol of what the values are. */
+  symbol?: string
   /** A value with a line of its own, such as one. */
   reference?: number
 }
@@ -30,7 +32,7 @@ const inside = (at: number, [a, b]: readonly [number, number]): boolean =>
 /** One frame: grid, axes, curves with their names at their ends, marks and cursor. */
 export function Panel(props: PanelProps) {
   const { x, y, cursorGeV } = props
-  const clip = `clip-${y.range.map(Math.round).join('-')}-${x.range.map(Math.round).join('-')}`
+  const clip = useId()
   const cursor = cursorGeV === null ? NaN : position(x, cursorGeV)
   return (
     <g>
@@ -49,7 +51,7 @@ export function Panel(props: PanelProps) {
         ))}
       </g>
       {props.marks.map((mark) => (
-        <MarkLine key={mark.label} mark={mark} x={x} y={y} />
+        <MarkLine key={`${mark.label} ${mark.temperatureGeV}`} mark={mark} x={x} y={y} />
       ))}
       {inside(cursor, x.range) ? (
         <path
@@ -64,7 +66,7 @@ export function Panel(props: PanelProps) {
   )
 }
 
-function Axes({ x, y, temperatureLabels, caption, reference }: PanelProps) {
+function Axes({ x, y, temperatureLabels, caption, symbol, reference }: PanelProps) {
   const xTicks = logTicks(x.domain, Math.floor((x.range[1] - x.range[0]) / PX_PER_TEMPERATURE_LABEL)).filter(
     (tick) => tick.major,
   )
@@ -74,7 +76,7 @@ function Axes({ x, y, temperatureLabels, caption, reference }: PanelProps) {
     (tick) => tick.major,
   )
   return (
-    <g className="text-[11.5px]" fill="var(--soft)">
+    <g className="text-[12px]" fill="var(--soft)">
       {xTicks.map(({ value }) => (
         <path key={value} d={`M${position(x, value)} ${y.range[1]}V${y.range[0]}`} stroke="var(--grid)" />
       ))}
@@ -82,9 +84,12 @@ function Axes({ x, y, temperatureLabels, caption, reference }: PanelProps) {
         <path
           key={value}
           d={`M${x.range[0]} ${position(y, value)}H${x.range[1]}`}
-          stroke={value === reference ? 'var(--faint)' : 'var(--grid)'}
+          stroke="var(--grid)"
         />
       ))}
+      {reference === undefined ? null : (
+        <path d={`M${x.range[0]} ${position(y, reference)}H${x.range[1]}`} stroke="var(--faint)" />
+      )}
       {yTicks.map(({ value }) => (
         <text key={value} x={x.range[0] - 8} y={position(y, value)} dy="0.34em" textAnchor="end">
           <TickNumber value={value} />
@@ -94,10 +99,23 @@ function Axes({ x, y, temperatureLabels, caption, reference }: PanelProps) {
       {temperatureLabels
         ? xTicks.map(({ value }) => (
             <text key={value} x={position(x, value)} y={y.range[0] + 17} textAnchor="middle">
-              {temperatureTick(value)}
+              <TemperatureTick temperatureGeV={value} />
             </text>
           ))
         : null}
+      {symbol ? (
+        <text
+          x={x.range[0] + 8}
+          y={y.range[1] + 14}
+          className="font-serif text-[14px] italic"
+          fill="var(--ink)"
+          stroke="var(--paper)"
+          strokeWidth={4}
+          paintOrder="stroke"
+        >
+          {symbol}
+        </text>
+      ) : null}
       {caption ? (
         <text x={x.range[1]} y={y.range[1] - 4} textAnchor="end">
           {caption}

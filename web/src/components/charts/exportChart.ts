@@ -1,6 +1,7 @@
 /** A chart as a file: the drawing with its colours written in, the picture, the numbers. */
+import type { Curve } from '#core/bench/types'
 import { valueAtTemperature } from './curvePath.ts'
-import type { Series } from './LineChart.tsx'
+import type { Series } from './series.ts'
 
 function save(blob: Blob, name: string): void {
   const link = document.createElement('a')
@@ -66,15 +67,19 @@ export async function savePng(svg: SVGSVGElement, title: string): Promise<void> 
   })
 }
 
-/** Rows of the shown curves at the temperatures of the first: RFC 4180. */
+/** The value in row i: as computed where the curve has this very temperature, else by its neighbours. */
+function cell(curve: Curve, temperature: number, i: number): number | '' {
+  const same = curve.temperatureGeV[i] === temperature
+  const value = same ? curve.value[i]! : valueAtTemperature(curve, temperature)
+  return Number.isFinite(value) ? value : ''
+}
+
+/** Rows of the shown curves at the temperatures of the first, empty where a curve is not defined: RFC 4180. */
 export function csvText(series: readonly Series[]): string {
   const header = ['temperatureGeV', ...series.map((each) => each.id)].join(',')
   const grid = series[0]?.curve.temperatureGeV ?? new Float64Array()
   const rows = [...grid].map((temperature, i) =>
-    [
-      temperature,
-      ...series.map((each) => each.curve.value[i] ?? valueAtTemperature(each.curve, temperature)),
-    ].join(','),
+    [temperature, ...series.map(({ curve }) => cell(curve, temperature, i))].join(','),
   )
   return [header, ...rows].join('\r\n') + '\r\n'
 }

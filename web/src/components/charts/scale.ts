@@ -25,27 +25,45 @@ export interface Tick {
   major: boolean
 }
 
-/** Powers of ten inside a domain, thinned to at most `most`; between them the digits 2 to 9 when they are few. */
+/** Fewer labels than this do not tell what an axis measures. */
+const FEWEST = 2
+
+/**
+ * Ticks of a logarithmic axis. Powers of ten carry labels, thinned to about `most`; the digits between are minor.
+ * Where hardly a power of ten fits, 2 and 5 carry labels too, and in a narrower domain still, round values.
+ * Empty where a logarithm has no meaning.
+ */
 export function logTicks(domain: readonly [number, number], most: number): Tick[] {
   const low = Math.min(...domain)
   const high = Math.max(...domain)
+  if (!(low > 0 && high < Infinity)) return []
+  const ticks = decades(low, high, most)
+  if (ticks.filter((tick) => tick.major).length >= FEWEST) return ticks
+  const labelled = ticks.map(({ value }) => ({ value, major: /^[125]e/.test(value.toExponential()) }))
+  if (labelled.filter((tick) => tick.major).length >= FEWEST) return labelled
+  return linearTicks([low, high], Math.max(FEWEST, Math.min(most, 4)))
+}
+
+function decades(low: number, high: number, most: number): Tick[] {
   const first = Math.ceil(Math.log10(low) - 1e-9)
   const last = Math.floor(Math.log10(high) + 1e-9)
   const every = Math.max(1, Math.ceil((last - first + 1) / Math.max(1, most)))
   const ticks: Tick[] = []
   for (let power = first - 1; power <= last; power++) {
-    const value = Number(`1e${power}`)
-    if (power >= first) ticks.push({ value, major: power % every === 0 })
+    if (power >= first) ticks.push({ value: Number(`1e${power}`), major: power % every === 0 })
     if (every > 1) continue
-    for (let digit = 2; digit <= 9; digit++)
-      if (digit * value > low && digit * value < high) ticks.push({ value: digit * value, major: false })
+    for (let digit = 2; digit <= 9; digit++) {
+      const value = Number(`${digit}e${power}`)
+      if (value >= low && value <= high) ticks.push({ value, major: false })
+    }
   }
   return ticks
 }
 
-/** Round values inside a domain, about `wanted` of them. */
+/** Round values inside a domain, about `wanted` of them; none in an empty domain. */
 export function linearTicks(domain: readonly [number, number], wanted: number): Tick[] {
   const [low, high] = domain
+  if (!(high > low && high - low < Infinity)) return []
   const rough = (high - low) / wanted
   const power = 10 ** Math.floor(Math.log10(rough))
   const step = [1, 2, 2.5, 5, 10].find((factor) => factor * power >= rough)! * power

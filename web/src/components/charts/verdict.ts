@@ -9,20 +9,33 @@ export interface MeasuredDensity {
   standardError: number
 }
 
-const SHORT = 2
+const DIGITS = 2
 
-/** "1.8 % above, 1.8 σ"; beyond a factor two, "3.2 times above"; below a half, "72 % below". */
-export function verdict(omegaH2: number, measured: MeasuredDensity): Verdict {
-  const ratio = omegaH2 / measured.omegaH2
-  const sigma = Math.abs(omegaH2 - measured.omegaH2) / measured.standardError
+/** Closer than this fraction the two are the same to the digits anyone writes. */
+const LEVEL = 5e-5
+
+/** Below this fraction a percentage would round to "100 % below". */
+const HARDLY_ANY = 0.01
+
+/**
+ * "1.8 % above, 1.8 σ" up to a factor two, "3.2 times above" beyond it, where the σ say no more;
+ * "72 % below, 72 σ", and under a hundredth "250 times below".
+ */
+export function verdict(omegaH2: number, { omegaH2: measured, standardError }: MeasuredDensity): Verdict {
+  const ratio = omegaH2 / measured
+  if (Math.abs(ratio - 1) < LEVEL) return { words: 'as measured', side: 'level' }
   const side = ratio > 1 ? 'above' : 'below'
-  if (Math.abs(ratio - 1) < 5e-5) return { words: 'as measured', side: 'level' }
-  const sigmaWords = `${Number(sigma.toPrecision(SHORT)).toLocaleString('en')} σ`
-  if (ratio >= 2) return { words: `${timesWords(ratio)} the measured density, ${sigmaWords}`, side }
-  return { words: `${Number((Math.abs(ratio - 1) * 100).toPrecision(SHORT))} % ${side}, ${sigmaWords}`, side }
+  if (ratio === 0) return { words: 'none left', side }
+  if (ratio >= 2 || ratio < HARDLY_ANY)
+    return { words: `${times(ratio >= 2 ? ratio : 1 / ratio)} times ${side}`, side }
+  const sigmas = Math.abs(omegaH2 - measured) / standardError
+  return { words: `${rounded(Math.abs(ratio - 1) * 100)} % ${side}, ${rounded(sigmas)} σ`, side }
 }
 
-const timesWords = (ratio: number): string =>
-  ratio < 1e4
-    ? `${Number(ratio.toPrecision(SHORT)).toLocaleString('en')} times`
-    : `10^${Math.round(Math.log10(ratio))} times`
+const rounded = (value: number): string => Number(value.toPrecision(DIGITS)).toLocaleString('en')
+
+const times = (ratio: number): string =>
+  ratio < 1e4 ? rounded(ratio) : `10${superscript(Math.round(Math.log10(ratio)))}`
+
+const superscript = (power: number): string =>
+  String(power).replace(/\d/g, (digit) => '⁰¹²³⁴⁵⁶⁷⁸⁹'[Number(digit)]!)

@@ -59,24 +59,24 @@ const Dot = () => (
 )
 
 /** Width of the mark for a factor e, px. */
-const PX_PER_E_FOLD = 40
-const MOST_PX = 46
+const PX_PER_E_FOLD = 26
+const MOST_PX = 31
 
 /** ×1.925 over a small bar about one: filled to the right when it raises the abundance, outlined to the left when it lowers it. */
 function FactorMark({ factor }: { factor: AssumptionFactor | undefined }): ReactNode {
   const value = factor?.oneAtATime
   if (value === undefined || value === null)
-    return <span className="w-24 text-right text-small text-soft">{factor ? 'not computable' : ''}</span>
+    return <span className="w-16 text-right text-small text-soft">{factor ? 'not computable' : ''}</span>
   const size = Math.min(MOST_PX, Math.abs(Math.log(value)) * PX_PER_E_FOLD)
   const rises = value > 1
   return (
-    <span className="w-24 text-right">
+    <span className="w-16 text-right">
       <span className="number text-small">× {factorText(value)}</span>
-      <svg aria-hidden="true" width="96" height="10" viewBox="0 0 96 10" className="block">
-        <path d="M48 1v8" stroke="var(--faint)" />
+      <svg aria-hidden="true" width="64" height="10" viewBox="0 0 64 10" className="block">
+        <path d="M32 1v8" stroke="var(--faint)" />
         {size > 0.5 ? (
           <rect
-            x={rises ? 48 : 48 - size}
+            x={rises ? 32 : 32 - size}
             y="2.5"
             width={size}
             height="5"

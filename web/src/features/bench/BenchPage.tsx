@@ -252,14 +252,14 @@ function SaveBar({ session, draft, ready, onSave }: SaveBarProps) {
   const changed = draft.historyChanged || draft.candidateChanged
   const reader = session.role === 'reader'
   return (
-    <div className="flex flex-wrap items-center gap-2 pt-6">
+    <div className="flex flex-wrap items-center gap-x-4 gap-y-2 pt-6">
       <Button variant="primary" disabled={reader || !ready} onClick={onSave}>
         {changed ? 'Save revision' : 'Save evaluation'}
       </Button>
-      <Button disabled={!draft.canUndo} onClick={draft.undo}>
+      <Button variant="link" disabled={!draft.canUndo} onClick={draft.undo}>
         Undo
       </Button>
-      <Button disabled={!draft.canRedo} onClick={draft.redo}>
+      <Button variant="link" disabled={!draft.canRedo} onClick={draft.redo}>
         Redo
       </Button>
       {changed ? (

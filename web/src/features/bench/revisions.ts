@@ -1,7 +1,7 @@
 /** Finds the revisions the Bench rests on. */
 import { queryOptions } from '@tanstack/react-query'
 import type { QueryClient } from '@tanstack/react-query'
-import type { CandidateRevision, HistoryRevision } from '#core/wire/index'
+import type { CandidateRevision, HistoryRevision, HistorySummary } from '#core/wire/index'
 import { candidateQuery, candidatesQuery, historiesQuery, historyQuery } from '../../api/records.ts'
 import type { RevisionChoice } from './draft.ts'
 
@@ -12,6 +12,13 @@ export interface Chosen<R> {
   revision: R
   /** Number of the newest revision of the record. */
   newest: number
+}
+
+/** A history that shows what the Bench is for: the best-known bath, differing from the baseline in it. */
+function firstLook(list: readonly HistorySummary[], baselineId: string | null): HistorySummary | undefined {
+  const others = list.filter((item) => item.head.id !== baselineId)
+  const fits = others.filter(({ head: { input } }) => input.bath.treatment === 'fit-2018')
+  return fits.find(({ head: { input } }) => input.expansion.kind === 'radiation') ?? fits[0] ?? list[0]
 }
 
 /** The chosen revision of a history, or one worth looking at when none is chosen. */
@@ -25,11 +32,7 @@ export const chosenHistoryQuery = (
     staleTime: Infinity,
     queryFn: async (): Promise<Chosen<HistoryRevision> | null> => {
       const list = await client.ensureQueryData(historiesQuery)
-      const wanted = choice
-        ? list.find((item) => item.id === choice.recordId)
-        : (list.find(
-            (item) => item.head.input.bath.treatment === 'fit-2018' && item.head.id !== baselineId,
-          ) ?? list[0])
+      const wanted = choice ? list.find((item) => item.id === choice.recordId) : firstLook(list, baselineId)
       if (!wanted) return null
       const of = { recordId: wanted.id, name: wanted.name, newest: wanted.head.number }
       if (!choice || choice.number === wanted.head.number) return { ...of, revision: wanted.head }

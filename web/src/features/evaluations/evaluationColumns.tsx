@@ -58,7 +58,10 @@ export const EVALUATION_COLUMNS: readonly RecordColumn<Evaluation>[] = [
     title: 'Candidate',
     sortBy: ({ candidate }) => revisionText(candidate),
     cell: ({ candidate }) => (
-      <Link to={`/candidates/${candidate.recordId}?revision=${candidate.number}`} className="hover:text-ember">
+      <Link
+        to={`/candidates/${candidate.recordId}?revision=${candidate.number}`}
+        className="hover:text-ember"
+      >
         {revisionText(candidate)}
       </Link>
     ),

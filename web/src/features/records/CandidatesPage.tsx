@@ -8,7 +8,8 @@ import { recordColumns } from './recordColumns.tsx'
 import { RecordTable } from './RecordTable.tsx'
 import type { RecordColumn } from './RecordTable.tsx'
 
-const mechanismTitle = (candidate: CandidateSummary): string => MECHANISM_TITLES[candidate.head.input.mechanism]
+const mechanismTitle = (candidate: CandidateSummary): string =>
+  MECHANISM_TITLES[candidate.head.input.mechanism]
 
 const searchText = (candidate: CandidateSummary): string =>
   [

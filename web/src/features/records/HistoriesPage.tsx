@@ -34,7 +34,8 @@ function columnsOf(baselineId: string | null): RecordColumn<HistorySummary>[] {
     id: 'baseline',
     title: 'Baseline',
     sortBy: (history) => (history.head.id === baselineId ? 1 : 0),
-    cell: (history) => (history.head.id === baselineId ? <strong className="text-ember">baseline</strong> : '–'),
+    cell: (history) =>
+      history.head.id === baselineId ? <strong className="text-ember">baseline</strong> : '–',
   }
   return [name, assumptions, ...rest, baseline]
 }

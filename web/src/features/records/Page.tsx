@@ -7,7 +7,7 @@ export function Page({ title, children }: { title: string; children: ReactNode }
       id="main"
       className="mx-auto grid w-full max-w-[76rem] grid-cols-[minmax(0,1fr)] gap-5 px-(--gutter) py-7 max-md:px-4"
     >
-      <title>{`${title} — Emberline`}</title>
+      <title>{`${title} · Emberline`}</title>
       {children}
     </main>
   )

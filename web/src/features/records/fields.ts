@@ -24,7 +24,9 @@ export function fieldsOf(value: unknown, path = ''): FieldEntry[] {
   if (isRow(value)) return [{ path, value }]
   if (Array.isArray(value)) return value.flatMap((item, index) => fieldsOf(item, `${path}[${index}]`))
   if (value !== null && typeof value === 'object')
-    return Object.entries(value).flatMap(([key, item]) => fieldsOf(item, path === '' ? key : `${path}.${key}`))
+    return Object.entries(value).flatMap(([key, item]) =>
+      fieldsOf(item, path === '' ? key : `${path}.${key}`),
+    )
   return [{ path, value: value as FieldValue }]
 }
 
@@ -49,5 +51,4 @@ const UNITS: readonly (readonly [ending: RegExp, unit: string])[] = [
 ]
 
 /** The unit a field carries in its name; undefined for pure numbers and words. */
-export const unitOf = (path: string): string | undefined =>
-  UNITS.find(([ending]) => ending.test(path))?.[1]
+export const unitOf = (path: string): string | undefined => UNITS.find(([ending]) => ending.test(path))?.[1]
