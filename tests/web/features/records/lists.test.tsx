@@ -1,5 +1,6 @@
 import { cleanup, fireEvent, screen, within } from '@testing-library/react'
 import { afterEach, describe, expect, it, vi } from 'vitest'
+import { candidateInput } from '#core/wire/index'
 import CandidatesPage from '../../../../web/src/features/records/CandidatesPage.tsx'
 import HistoriesPage from '../../../../web/src/features/records/HistoriesPage.tsx'
 import { aCandidate, aHistory, candidateRecordOf, historyRecordOf, renderPage, serve, sessionOf, uuid } from './support.tsx'
@@ -28,7 +29,7 @@ describe('the list of histories', () => {
     expect(row.textContent).toContain('at most 2 TeV')
     const marked = (await screen.findByText('baseline')).closest('tr')!
     expect(within(marked).getByRole('link').getAttribute('href')).toBe(`/histories/${uuid(100)}`)
-    expect(document.title).toBe('Histories — Emberline')
+    expect(document.title).toBe('Histories · Emberline')
   })
 
   it('shows that it is waiting', () => {
@@ -56,11 +57,12 @@ describe('the list of histories', () => {
 
 describe('the list of candidates', () => {
   it('describes each candidate and can be filtered by mechanism', async () => {
-    const relic = aCandidate({
+    const relic = candidateInput.parse({
       mechanism: 'hot-relic',
       massGeV: 1e-8,
+      degreesOfFreedom: 2,
+      statistics: 'fermion',
       decouplingTemperatureGeV: 0.002,
-      annihilation: undefined,
     })
     serve({
       '/candidates': page([

@@ -81,11 +81,7 @@ function Axes({ x, y, temperatureLabels, caption, symbol, reference }: PanelProp
         <path key={value} d={`M${position(x, value)} ${y.range[1]}V${y.range[0]}`} stroke="var(--grid)" />
       ))}
       {yTicks.map(({ value }) => (
-        <path
-          key={value}
-          d={`M${x.range[0]} ${position(y, value)}H${x.range[1]}`}
-          stroke="var(--grid)"
-        />
+        <path key={value} d={`M${x.range[0]} ${position(y, value)}H${x.range[1]}`} stroke="var(--grid)" />
       ))}
       {reference === undefined ? null : (
         <path d={`M${x.range[0]} ${position(y, reference)}H${x.range[1]}`} stroke="var(--faint)" />

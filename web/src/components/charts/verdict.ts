@@ -1,3 +1,5 @@
+import { superscript } from './superscript.ts'
+
 /** How an abundance stands against the measured density, in words. */
 export interface Verdict {
   words: string
@@ -36,6 +38,3 @@ const rounded = (value: number): string => Number(value.toPrecision(DIGITS)).toL
 
 const times = (ratio: number): string =>
   ratio < 1e4 ? rounded(ratio) : `10${superscript(Math.round(Math.log10(ratio)))}`
-
-const superscript = (power: number): string =>
-  String(power).replace(/\d/g, (digit) => '⁰¹²³⁴⁵⁶⁷⁸⁹'[Number(digit)]!)

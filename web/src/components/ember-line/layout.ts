@@ -1,5 +1,6 @@
 /** The geometry of the ember line: what stands where, and which label yields. */
 import type { EpochMark } from '#core/bench/types'
+import { superscript } from '../charts/superscript.ts'
 import type { TemperatureWindow } from '../charts/window.ts'
 
 export interface Label {
@@ -53,9 +54,7 @@ export const spanOf = (range: TemperatureWindow, window: TemperatureWindow): Tem
 
 /** The epochs that lie on the line. */
 export const epochsWithin = (epochs: readonly EpochMark[], span: TemperatureWindow): EpochMark[] =>
-  epochs.filter(
-    ({ temperatureGeV }) => temperatureGeV <= span.hotGeV && temperatureGeV >= span.coldGeV,
-  )
+  epochs.filter(({ temperatureGeV }) => temperatureGeV <= span.hotGeV && temperatureGeV >= span.coldGeV)
 
 const UNITS: readonly (readonly [unit: string, seconds: number])[] = [
   ['Gyr', 3.15576e16],
@@ -70,17 +69,24 @@ const UNITS: readonly (readonly [unit: string, seconds: number])[] = [
   ['ns', 1e-9],
   ['ps', 1e-12],
   ['fs', 1e-15],
+  ['as', 1e-18],
 ]
 
-/** Two digits in the unit that suits: 0.15 ps is written 150 fs; below a femtosecond in powers of ten. */
+/** Two digits in the unit that suits: 0.15 ps is written 150 fs; below an attosecond in powers of ten. */
 export function ageText(seconds: number): string {
   const found = UNITS.find(([, size]) => seconds >= size * 0.995)
-  if (!found) return `${seconds.toExponential(0).replace('e-', ' × 10⁻')} s`
+  if (!found) {
+    const [mantissa, power] = seconds.toExponential(0).split('e')
+    return `${mantissa} × 10${superscript(Number(power))} s`
+  }
   return `${Number((seconds / found[1]).toPrecision(2))} ${found[0]}`
 }
 
 /** The age at a temperature when one is given there, else nothing. */
-export function ageAt(times: readonly { temperatureGeV: number; timeS: number }[], temperatureGeV: number): string {
+export function ageAt(
+  times: readonly { temperatureGeV: number; timeS: number }[],
+  temperatureGeV: number,
+): string {
   const found = times.find((time) => Math.abs(Math.log(time.temperatureGeV / temperatureGeV)) < 1e-6)
   return found ? ageText(found.timeS) : ''
 }
