@@ -1,6 +1,6 @@
 /** The public surface of the core. */
 export { abundance, computeAbundance } from './abundance/abundance.ts'
-export { ConvergenceError } from './abundance/convergence.ts'
+export { ConvergenceError } from './numerics/convergence.ts'
 export { benchAnswer } from './bench/report.ts'
 export type * from './bench/types.ts'
 export { MEASURED_DENSITY } from './constants/measured.ts'

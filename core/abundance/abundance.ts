@@ -5,7 +5,7 @@ import type { CandidateInput } from '../wire/candidate.ts'
 import { abundanceRequest } from '../wire/compute.ts'
 import type { AbundanceResult } from '../wire/compute.ts'
 import { InputError, parseInput } from '../wire/fault.ts'
-import { ConvergenceError } from './convergence.ts'
+import { ConvergenceError } from '../numerics/convergence.ts'
 import { mechanismOf } from './mechanisms/mechanisms.ts'
 
 /** A maximum temperature below the reheating that follows a matter era contradicts it. */
@@ -25,7 +25,7 @@ function refuseContradiction({ input }: ThermalHistory): void {
 export function abundance(history: ThermalHistory, candidate: CandidateInput): AbundanceResult {
   refuseContradiction(history)
   const result = mechanismOf(candidate).abundance(history, candidate)
-  if (!Number.isFinite(result.omegaH2)) throw new ConvergenceError('the abundance is not a finite number')
+  if (!(result.omegaH2 > 0 && result.omegaH2 < Infinity)) throw new ConvergenceError('the abundance found is no positive finite number')
   return isMatterEra(history.expansion) ? { ...result, dilution: history.expansion.dilution } : result
 }
 

@@ -9,7 +9,7 @@
 import { emptyExpansion } from '../history/expansionPoint.ts'
 import type { ThermalHistory } from '../history/thermalHistory.ts'
 import { solveOde } from '../numerics/ode/radau.ts'
-import { integrationFailure } from './convergence.ts'
+import { integrationFailure } from '../numerics/convergence.ts'
 import { logEquilibriumYield } from './equilibrium.ts'
 import type { EquilibriumSpecies } from './equilibrium.ts'
 import { FREEZE_IN_RULES, productionPerLnT, solveFreezeIn } from './freezeIn.ts'

@@ -3,7 +3,7 @@
  * difference is its estimated error. When two neighbours disagree the next finer one is tried; when the finest two still
  * disagree there is no result.
  */
-import { ConvergenceError } from './convergence.ts'
+import { ConvergenceError } from '../numerics/convergence.ts'
 
 /** Relative difference between neighbouring efforts that is taken as agreement. */
 const AGREEMENT = 5e-7

@@ -9,7 +9,7 @@ import type { OdeOptions, OdeProblem, OdeStep } from '../numerics/ode/problem.ts
 import { integrateWith } from '../numerics/quadrature/gaussLegendre.ts'
 import { brent } from '../numerics/roots/brent.ts'
 import type { AnnihilatingState } from './annihilatingState.ts'
-import { integrationFailure } from './convergence.ts'
+import { integrationFailure } from '../numerics/convergence.ts'
 import { panelRule } from './freezeOutEffort.ts'
 import type { Effort } from './freezeOutEffort.ts'
 import { Sampler } from './yieldSamples.ts'

@@ -15,8 +15,19 @@ export const EFFORTS: readonly Effort[] = [
   { tolerance: 1e-9, rule: gaussLegendre(16) },
 ]
 
+/** The same for a decaying parent: errors of ln Z_B grow with the e-folds of its decay, so the tolerances are finer. */
+export const DECAY_EFFORTS: readonly Effort[] = [
+  { tolerance: 1e-6, rule: gaussLegendre(8) },
+  { tolerance: 1e-8, rule: gaussLegendre(12) },
+  { tolerance: 1e-9, rule: gaussLegendre(16) },
+  { tolerance: 1e-10, rule: gaussLegendre(20) },
+]
+
 /** Global error of the order-9 solution over the tolerance of its order-5 estimate; at most this in all reference cases. */
 export const LEFT_OF_TOLERANCE = 5e-4
+
+/** The same for a decaying parent. */
+export const LEFT_OF_DECAY_TOLERANCE = 1
 
 const MINOR_RULE = gaussLegendre(6)
 const SLIGHT_RULE = gaussLegendre(3)

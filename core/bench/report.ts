@@ -2,7 +2,7 @@
 import { abundance } from '../abundance/abundance.ts'
 import { guardsLookedAt } from '../abundance/guards/guard.ts'
 import { mechanismOf } from '../abundance/mechanisms/mechanisms.ts'
-import { ConvergenceError } from '../abundance/convergence.ts'
+import { ConvergenceError } from '../numerics/convergence.ts'
 import { ages } from '../history/time.ts'
 import { buildHistory } from '../history/thermalHistory.ts'
 import type { ThermalHistory } from '../history/thermalHistory.ts'

@@ -16,7 +16,7 @@ import { FREEZE_IN_RULES, solveFreezeIn } from '../freezeIn.ts'
 import type { FreezeInSource } from '../freezeIn.ts'
 import { decaySource } from '../freezeInSources.ts'
 import type { Effort } from '../freezeOutEffort.ts'
-import { EFFORTS, LEFT_OF_TOLERANCE } from '../freezeOutEffort.ts'
+import { DECAY_EFFORTS, LEFT_OF_DECAY_TOLERANCE, LEFT_OF_TOLERANCE } from '../freezeOutEffort.ts'
 import { decayGuards } from '../guards/freezeInGuards.ts'
 import { annihilationRate } from '../rates/annihilationRate.ts'
 import { relicDensity } from '../relicDensity.ts'
@@ -77,10 +77,10 @@ function throughFreezeOut(
   const state = parentState(history, candidate, annihilation)
   const width = widthOf(candidate)
   const result = checked(
-    EFFORTS.length,
-    (i) => decayed(candidate, state, EFFORTS[i]!),
+    DECAY_EFFORTS.length,
+    (i) => decayed(candidate, state, DECAY_EFFORTS[i]!),
     (found) => found.yieldToday,
-    (i) => history.tableError + LEFT_OF_TOLERANCE * EFFORTS[i]!.tolerance,
+    (i) => history.tableError + LEFT_OF_DECAY_TOLERANCE * DECAY_EFFORTS[i]!.tolerance,
   )
   const stable = checkedFreezeOut(history, state, {
     x: startX(history, candidate.parent),
@@ -157,7 +157,7 @@ export const freezeInDecay: Mechanism<FreezeInDecayInput> = {
         parentState(history, candidate, annihilation),
         widthOf(candidate),
         candidate.perDecay,
-        EFFORTS[1]!,
+        DECAY_EFFORTS[0]!,
         samples,
       )
     else if (candidate.backReaction)

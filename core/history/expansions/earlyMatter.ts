@@ -11,7 +11,8 @@
  * Sources: Scherrer & Turner, Phys. Rev. D 31 (1985) 681; Giudice, Kolb, Riotto, Phys. Rev. D 64 (2001) 023508.
  */
 import { evaluate } from '../../numerics/interpolation/chebyshev.ts'
-import { denseOde } from '../../numerics/ode/dense.ts'
+import { ConvergenceError } from '../../numerics/convergence.ts'
+import { OdeFailure, denseOde } from '../../numerics/ode/dense.ts'
 import type { DenseSolution } from '../../numerics/ode/dense.ts'
 import { brent } from '../../numerics/roots/brent.ts'
 import type { ExpansionInput } from '../../wire/history.ts'
@@ -74,7 +75,8 @@ function solveEra(radiation: Radiation, width: number, start: number, coldest: n
         const field = Math.exp(y[F]! - y[S]!) * point.entropy
         const hubble = hubbleOf(point.energy + field)
         const heating = (width * field) / (hubble * point.temperature * point.entropy)
-        const perLnT = -point.stretch / (1 - heating / 3)
+        // Heating by more than the expansion cools would make T rise again: no function of T any more.
+        const perLnT = heating < 3 ? -point.stretch / (1 - heating / 3) : NaN
         const fraction = field / (point.energy + field)
         slope[F] = -(width / hubble) * perLnT
         slope[S] = heating * perLnT
@@ -95,11 +97,27 @@ function solveEra(radiation: Radiation, width: number, start: number, coldest: n
   )
 }
 
+/**
+ * The same, with a failure in words. Where the bath steps to far fewer states while the field decays, the cold side would be
+ * heated above the step again: T would stand still there, which a bath of steps cannot express.
+ */
+function solvedEra(radiation: Radiation, width: number, start: number, coldest: number): DenseSolution {
+  try {
+    return solveEra(radiation, width, start, coldest)
+  } catch (error) {
+    if (!(error instanceof OdeFailure)) throw error
+    const place = `${Math.exp(error.t).toPrecision(4)} GeV`
+    throw new ConvergenceError(
+      `the era of matter cannot be followed through ${place}, where this bath steps while the field heats it; a smooth bath can`,
+    )
+  }
+}
+
 function eraFromStart(input: EarlyMatterInput, radiation: Radiation, start: number): MatterEra {
   const { reheatTemperatureGeV, branching, fieldMassGeV } = input
   const width = widthOf(reheatTemperatureGeV, radiation)
   const coldest = Math.min(reheatTemperatureGeV, start) / AFTER_DECAY
-  const solution = solveEra(radiation, width, start, coldest)
+  const solution = solvedEra(radiation, width, start, coldest)
   const lnColdest = Math.log(coldest)
   const late = solution.at(solution.low, S)
   const perField = branching > 0 ? (branching * width) / fieldMassGeV! : 0

@@ -1,3 +1,4 @@
+import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { inputText, meaningfulDigits, numberParts, plainText } from '../../../web/src/lib/number.ts'
 
@@ -10,11 +11,23 @@ describe('numberParts', () => {
     [2.2e-26, 4, '2.2', -26],
     [-4.366e-12, 3, '-4.37', -12],
     [0.001, 4, '0.001', null],
-    [0.000999, 2, '1', -3],
+    [0.000999, 2, '1.0', -3],
+    [0.12003, 4, '0.1200', null],
+    [4.9999e-12, 3, '5.00', -12],
     [0.1565, 15, '0.1565', null],
     [0, 4, '0', null],
   ])('writes %d with %d digits', (value, digits, mantissa, exponent) => {
     expect(numberParts(value, digits)).toEqual({ mantissa, exponent })
+  })
+
+  it('writes a number of two digits with two, whatever its power of ten', () => {
+    fc.assert(
+      fc.property(fc.integer({ min: 11, max: 99 }), fc.integer({ min: -60, max: 60 }), (tenths, power) => {
+        fc.pre(tenths % 10 !== 0 && (power < -3 || power > 4))
+        const written = numberParts(Number(`${tenths / 10}e${power}`), 6)
+        expect(written).toEqual({ mantissa: String(tenths / 10), exponent: power })
+      }),
+    )
   })
 })
 

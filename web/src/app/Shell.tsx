@@ -50,7 +50,8 @@ function AccountMenu() {
   return (
     <details className="relative">
       <summary className="list-none py-3 text-soft hover:text-ink">
-        {session.user.name} <span aria-hidden="true">▾</span>
+        <span className="max-sm:hidden">{session.user.name}</span>
+        <span className="sm:hidden">Account</span> <span aria-hidden="true">▾</span>
       </summary>
       <div className="absolute right-0 z-30 grid w-64 gap-3 rounded-[6px] border border-rule bg-raised p-4 shadow-lg">
         <p className="text-small">

@@ -3,7 +3,16 @@ import { afterEach, describe, expect, it, vi } from 'vitest'
 import EvaluationPage from '../../../../web/src/features/evaluations/EvaluationPage.tsx'
 import type { Evaluation } from '#core/wire/index'
 import type { RecomputeReply, RecomputeRequest } from '../../../../web/src/workers/recompute.worker.ts'
-import { aCandidate, aHistory, candidateRecordOf, evaluationOf, historyRecordOf, renderPage, serve, uuid } from '../records/support.tsx'
+import {
+  aCandidate,
+  aHistory,
+  candidateRecordOf,
+  evaluationOf,
+  historyRecordOf,
+  renderPage,
+  serve,
+  uuid,
+} from '../records/support.tsx'
 
 const GUARD = {
   code: 'unitarity',
@@ -85,9 +94,9 @@ describe('the page of an evaluation', () => {
 
   it('tells what went in by its paths, and opens the same revisions on the Bench', async () => {
     show(evaluationOf(1))
-    expect((await screen.findByRole('rowheader', { name: 'candidate.massGeV' })).closest('tr')!.textContent).toContain(
-      '100 GeV',
-    )
+    expect(
+      (await screen.findByRole('rowheader', { name: 'candidate.massGeV' })).closest('tr')!.textContent,
+    ).toContain('100 GeV')
     expect(screen.getByRole('rowheader', { name: 'history.bath.treatment' })).toBeDefined()
     expect(screen.getByRole('link', { name: 'Open these revisions on the Bench' }).getAttribute('href')).toBe(
       `/bench?history=${uuid(100)}@1&candidate=${uuid(200)}@1`,

@@ -3,7 +3,16 @@ import { afterEach, describe, expect, it, vi } from 'vitest'
 import { candidateInput } from '#core/wire/index'
 import CandidatesPage from '../../../../web/src/features/records/CandidatesPage.tsx'
 import HistoriesPage from '../../../../web/src/features/records/HistoriesPage.tsx'
-import { aCandidate, aHistory, candidateRecordOf, historyRecordOf, renderPage, serve, sessionOf, uuid } from './support.tsx'
+import {
+  aCandidate,
+  aHistory,
+  candidateRecordOf,
+  historyRecordOf,
+  renderPage,
+  serve,
+  sessionOf,
+  uuid,
+} from './support.tsx'
 
 afterEach(() => {
   cleanup()
@@ -39,7 +48,12 @@ describe('the list of histories', () => {
   })
 
   it('says what the server said when it fails, and asks again when told to', async () => {
-    serve({ '/histories': { status: 503, body: { title: 'Out of reach', status: 503, detail: 'The store is down.' } } })
+    serve({
+      '/histories': {
+        status: 503,
+        body: { title: 'Out of reach', status: 503, detail: 'The store is down.' },
+      },
+    })
     showHistories()
     expect((await screen.findByRole('alert')).textContent).toContain('The store is down.')
     serve({ '/histories': page([historyRecordOf(100, 'Standard', aHistory())]) })
@@ -71,7 +85,9 @@ describe('the list of candidates', () => {
       ]),
     })
     renderPage(CandidatesPage, '/candidates', '/candidates')
-    expect((await screen.findByRole('link', { name: 'Light' })).closest('tr')!.textContent).toContain('10 eV fermion')
+    expect((await screen.findByRole('link', { name: 'Light' })).closest('tr')!.textContent).toContain(
+      '10 eV fermion',
+    )
     fireEvent.change(screen.getByRole('searchbox'), { target: { value: 'freeze-out' } })
     expect(screen.queryByRole('link', { name: 'Light' })).toBeNull()
     expect(screen.getByRole('link', { name: 'Thermal' })).toBeDefined()

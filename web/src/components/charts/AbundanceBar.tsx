@@ -1,4 +1,4 @@
-import { TickNumber } from './AxisLabels.tsx'
+import { TickNumber, needsPowers } from './AxisLabels.tsx'
 import { barDomain } from './barDomain.ts'
 import { logTicks, position } from './scale.ts'
 import type { AxisScale } from './scale.ts'
@@ -17,7 +17,7 @@ interface AbundanceBarProps {
 const HEIGHT = 60
 const LINE = 32
 const MARGIN = 12
-const PX_PER_LABEL = 60
+const PX_PER_LABEL = 52
 
 /** Room the words "too much" need beside the measured mark, px. */
 const WORDS_ROOM = 80
@@ -65,19 +65,20 @@ export function AbundanceBar({ omegaH2, measured, band, verdict }: AbundanceBarP
 
 function Line({ x }: { x: AxisScale }) {
   const most = Math.max(3, Math.floor((x.range[1] - x.range[0]) / PX_PER_LABEL))
+  const values = logTicks(x.domain, most)
+    .filter((tick) => tick.major)
+    .map((tick) => tick.value)
   return (
     <g fill="var(--soft)">
       <path d={`M${x.range[0]} ${LINE}H${x.range[1]}`} stroke="var(--faint)" />
-      {logTicks(x.domain, most)
-        .filter((tick) => tick.major)
-        .map(({ value }) => (
-          <g key={value}>
-            <path d={`M${position(x, value)} ${LINE - 4}v8`} stroke="var(--faint)" />
-            <text x={position(x, value)} y={LINE + 22} textAnchor="middle">
-              <TickNumber value={value} />
-            </text>
-          </g>
-        ))}
+      {values.map((value) => (
+        <g key={value}>
+          <path d={`M${position(x, value)} ${LINE - 4}v8`} stroke="var(--faint)" />
+          <text x={position(x, value)} y={LINE + 22} textAnchor="middle">
+            <TickNumber value={value} powers={needsPowers(values)} />
+          </text>
+        </g>
+      ))}
     </g>
   )
 }

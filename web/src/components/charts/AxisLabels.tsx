@@ -1,10 +1,27 @@
 import { numberParts } from '../../lib/number.ts'
 import { temperatureText } from '../../lib/temperature.ts'
 
-/** A number in SVG text: 0.01 to 9999 written out, else the power of ten, 10⁻⁴, with its power as a superscript. */
-export function TickNumber({ value }: { value: number }) {
+/** Sizes that are written out. */
+const PLAIN: readonly [number, number] = [1e-3, 1e4]
+
+/** Sizes written out even among powers of ten. */
+const PLAIN_AMONG_POWERS: readonly [number, number] = [0.1, 100]
+
+/** Whether an axis reaches beyond what is written out, so that its labels had better be powers of ten throughout. */
+export const needsPowers = (values: readonly number[]): boolean =>
+  values.some((value) => value < PLAIN[0] || value >= PLAIN[1])
+
+interface TickNumberProps {
+  value: number
+  /** Whether it stands among powers of ten. */
+  powers?: boolean
+}
+
+/** A number in SVG text: written out while it is short, else 10⁻⁴ with its power as a superscript. */
+export function TickNumber({ value, powers = false }: TickNumberProps) {
   const size = Math.abs(value)
-  if (size === 0 || (size >= 1e-2 && size < 1e4))
+  const [least, most] = powers ? PLAIN_AMONG_POWERS : PLAIN
+  if (size === 0 || (size >= least && size < most))
     return <>{numberParts(value, 3).mantissa.replace('-', '−')}</>
   const power = Math.floor(Math.log10(size) + 1e-9)
   const mantissa = Number((value / 10 ** power).toPrecision(3))

@@ -28,7 +28,9 @@ export interface LineChartProps {
 }
 
 const LEFT = 46
-const TOP = 8
+
+/** Room above the frame for the symbol of the values. */
+const TOP = 24
 const RIGHT = 108
 const RIGHT_NARROW = 12
 const RATIO_HEIGHT = 64

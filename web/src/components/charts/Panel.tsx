@@ -1,10 +1,10 @@
 import { useId, useMemo } from 'react'
-import { TemperatureTick, TickNumber } from './AxisLabels.tsx'
+import { TemperatureTick, TickNumber, needsPowers } from './AxisLabels.tsx'
+import { EndLabels } from './EndLabels.tsx'
 import type { Mark, Series } from './series.ts'
 import { pathData, stretches } from './curvePath.ts'
-import { linearTicks, logTicks, position } from './scale.ts'
+import { inside, linearTicks, logTicks, position } from './scale.ts'
 import type { AxisScale } from './scale.ts'
-import { spread } from './spread.ts'
 
 interface PanelProps {
   x: AxisScale
@@ -22,12 +22,9 @@ interface PanelProps {
   reference?: number
 }
 
-const LABEL_GAP = 14
 const PX_PER_TEMPERATURE_LABEL = 86
-const PX_PER_VALUE_LABEL = 34
-
-const inside = (at: number, [a, b]: readonly [number, number]): boolean =>
-  at >= Math.min(a, b) - 0.5 && at <= Math.max(a, b) + 0.5
+const PX_PER_VALUE_LABEL = 28
+const FEWEST_VALUES = 3
 
 /** One frame: grid, axes, curves with their names at their ends, marks and cursor. */
 export function Panel(props: PanelProps) {
@@ -54,12 +51,7 @@ export function Panel(props: PanelProps) {
         <MarkLine key={`${mark.label} ${mark.temperatureGeV}`} mark={mark} x={x} y={y} />
       ))}
       {inside(cursor, x.range) ? (
-        <path
-          d={`M${cursor} ${y.range[1]}V${y.range[0]}`}
-          stroke="var(--soft)"
-          strokeWidth={1}
-          opacity={0.7}
-        />
+        <path d={`M${cursor} ${y.range[1]}V${y.range[0]}`} stroke="var(--soft)" shapeRendering="crispEdges" />
       ) : null}
       {props.labels ? <EndLabels series={props.series} x={x} y={y} /> : null}
     </g>
@@ -71,12 +63,13 @@ function Axes({ x, y, temperatureLabels, caption, symbol, reference }: PanelProp
     (tick) => tick.major,
   )
   const height = y.range[0] - y.range[1]
-  const wanted = Math.max(2, Math.floor(height / PX_PER_VALUE_LABEL))
+  const wanted = Math.max(FEWEST_VALUES, Math.floor(height / PX_PER_VALUE_LABEL))
   const yTicks = (y.kind === 'log' ? logTicks(y.domain, wanted) : linearTicks(y.domain, wanted)).filter(
     (tick) => tick.major,
   )
+  const powers = y.kind === 'log' && needsPowers(yTicks.map((tick) => tick.value))
   return (
-    <g className="text-[12px]" fill="var(--soft)">
+    <g className="text-[12px]" shapeRendering="crispEdges" fill="var(--soft)">
       {xTicks.map(({ value }) => (
         <path key={value} d={`M${position(x, value)} ${y.range[1]}V${y.range[0]}`} stroke="var(--grid)" />
       ))}
@@ -88,7 +81,7 @@ function Axes({ x, y, temperatureLabels, caption, symbol, reference }: PanelProp
       )}
       {yTicks.map(({ value }) => (
         <text key={value} x={x.range[0] - 8} y={position(y, value)} dy="0.34em" textAnchor="end">
-          <TickNumber value={value} />
+          <TickNumber value={value} powers={powers} />
         </text>
       ))}
       <path d={`M${x.range[0]} ${y.range[0]}H${x.range[1]}`} stroke="var(--faint)" />
@@ -100,15 +93,7 @@ function Axes({ x, y, temperatureLabels, caption, symbol, reference }: PanelProp
           ))
         : null}
       {symbol ? (
-        <text
-          x={x.range[0] + 8}
-          y={y.range[1] + 14}
-          className="font-serif text-[14px] italic"
-          fill="var(--ink)"
-          stroke="var(--paper)"
-          strokeWidth={4}
-          paintOrder="stroke"
-        >
+        <text x={0} y={y.range[1] - 11} className="font-serif text-[14px] italic" fill="var(--ink)">
           {symbol}
         </text>
       ) : null}
@@ -169,37 +154,4 @@ function MarkLine({ mark, x, y }: { mark: Mark; x: AxisScale; y: AxisScale }) {
       </text>
     </g>
   )
-}
-
-/** Where the name of a curve stands: at the height of its last point in the frame. */
-function endHeight({ curve }: Series, x: AxisScale, y: AxisScale): number {
-  for (let i = curve.temperatureGeV.length - 1; i >= 0; i--) {
-    const at = position(x, curve.temperatureGeV[i]!)
-    const height = position(y, curve.value[i]!)
-    if (inside(at, x.range) && inside(height, y.range)) return height
-  }
-  return NaN
-}
-
-function EndLabels({ series, x, y }: { series: readonly Series[]; x: AxisScale; y: AxisScale }) {
-  const named = series
-    .map((each) => ({ each, height: endHeight(each, x, y) }))
-    .filter(({ height }) => Number.isFinite(height))
-  const placed = spread(
-    named.map(({ height }) => height),
-    LABEL_GAP,
-    [y.range[1] + 6, y.range[0] - 4],
-  )
-  return named.map(({ each }, i) => (
-    <text
-      key={each.id}
-      x={x.range[1] + 8}
-      y={placed[i]}
-      dy="0.34em"
-      fill={`var(${each.colour})`}
-      className="text-[12px]"
-    >
-      {each.shortName}
-    </text>
-  ))
 }

@@ -64,6 +64,9 @@ export function valueAtTemperature({ temperatureGeV, value }: Curve, at: number)
     const hot = temperatureGeV[i - 1]!
     const cold = temperatureGeV[i]!
     if (at > hot || at < cold) continue
+    // A neighbour that is not defined must not take the known point with it.
+    if (at === hot) return value[i - 1]!
+    if (at === cold) return value[i]!
     const share = Math.log(at / hot) / Math.log(cold / hot)
     return value[i - 1]! + share * (value[i]! - value[i - 1]!)
   }

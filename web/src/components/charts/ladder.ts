@@ -35,10 +35,10 @@ export function ladderDomain(values: readonly number[]): [number, number] {
   return [low / room, high * room]
 }
 
-/** Values labelled beneath: 1, 2, 5 of each decade while they are few, else powers of ten, at most `most`. */
+/** Values labelled beneath, at most about `most`: 1, 2, 5 of each decade while they are few, else powers of ten, or round values where neither fits. */
 export function ladderTicks(domain: readonly [number, number], most: number): number[] {
   const ticks = logTicks(domain, most)
   const round = ticks.filter(({ value }) => /^[125]e/.test(value.toExponential()))
-  const chosen = round.length > most ? ticks.filter((tick) => tick.major) : round
+  const chosen = round.length >= 2 && round.length <= most ? round : ticks.filter((tick) => tick.major)
   return chosen.map((tick) => tick.value)
 }

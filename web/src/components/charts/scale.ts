@@ -19,6 +19,10 @@ export function valueAt({ kind, domain, range }: AxisScale, at: number): number 
   return Math.exp(Math.log(domain[0]) + share * Math.log(domain[1] / domain[0]))
 }
 
+/** Whether a position lies in a range, given in either direction, to half a pixel. */
+export const inside = (at: number, [a, b]: readonly [number, number]): boolean =>
+  at >= Math.min(a, b) - 0.5 && at <= Math.max(a, b) + 0.5
+
 export interface Tick {
   value: number
   /** Minor ticks carry no label. */

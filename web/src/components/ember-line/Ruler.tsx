@@ -5,7 +5,7 @@ import { TemperatureTick } from '../charts/AxisLabels.tsx'
 import { logTicks, position } from '../charts/scale.ts'
 import type { AxisScale } from '../charts/scale.ts'
 import type { TemperatureWindow } from '../charts/window.ts'
-import { ageAt, epochsWithin, placeLabels } from './layout.ts'
+import { ageAt, isWithin, placeLabels } from './layout.ts'
 
 interface RulerProps {
   x: AxisScale
@@ -31,8 +31,13 @@ const MARK = 'mark'
 const STOPS = [1, 2, 3, 4, 5] as const
 
 /** The line in the colours of temperature, its ticks with ages, the epochs and the candidate's mark; the pointer passes through. */
-export function Ruler(props: RulerProps) {
-  const { x, line } = props
+export function Ruler(all: RulerProps) {
+  const { x, line, span, mark } = all
+  const props = {
+    ...all,
+    epochs: all.epochs.filter((epoch) => isWithin(epoch.temperatureGeV, span)),
+    mark: mark && isWithin(mark.temperatureGeV, span) ? mark : null,
+  }
   const ramp = useId()
   return (
     <g pointerEvents="none">
@@ -75,8 +80,8 @@ function Ticks({ x, line, compact, times }: RulerProps) {
     ))
 }
 
-function Names({ x, width, epochs, span, mark }: RulerProps) {
-  const labels = epochsWithin(epochs, span).map(({ code, label, temperatureGeV, importance }) => ({
+function Names({ x, width, epochs, mark }: RulerProps) {
+  const labels = epochs.map(({ code, label, temperatureGeV, importance }) => ({
     id: code + label,
     text: label,
     x: position(x, temperatureGeV),
@@ -103,10 +108,10 @@ function Names({ x, width, epochs, span, mark }: RulerProps) {
   ))
 }
 
-function Circles({ x, line, epochs, span, mark }: RulerProps) {
+function Circles({ x, line, epochs, mark }: RulerProps) {
   return (
     <>
-      {epochsWithin(epochs, span).map(({ code, label, temperatureGeV }) => (
+      {epochs.map(({ code, label, temperatureGeV }) => (
         <circle
           key={code + label}
           cx={position(x, temperatureGeV)}

@@ -1,5 +1,4 @@
 /** The geometry of the ember line: what stands where, and which label yields. */
-import type { EpochMark } from '#core/bench/types'
 import { superscript } from '../charts/superscript.ts'
 import type { TemperatureWindow } from '../charts/window.ts'
 
@@ -18,7 +17,7 @@ export interface PlacedLabel extends Label {
 const GAP = 10
 
 /** Width of a character at 12 px, near enough to keep labels apart without measuring text. */
-const CHARACTER = 6.4
+const CHARACTER = 6
 
 const widthOf = (text: string): number => text.length * CHARACTER
 
@@ -29,22 +28,27 @@ export function extent({ x, text, anchor }: PlacedLabel): [left: number, right: 
   return anchor === 'end' ? [x - width, x] : [x - width / 2, x + width / 2]
 }
 
-/** Places labels inside [0, width]; where two would collide, the less important one is left out. */
+const ANCHORS = ['middle', 'start', 'end'] as const
+
+/**
+ * Places labels inside [0, width]: over what they name, or beginning or ending there when that is where they have
+ * room; where two would collide all the same, the less important one is left out.
+ */
 export function placeLabels(labels: readonly Label[], width: number): PlacedLabel[] {
   const placed: PlacedLabel[] = []
-  for (const label of [...labels].sort((a, b) => b.importance - a.importance)) {
-    const half = widthOf(label.text) / 2
-    const anchor = label.x < half ? 'start' : label.x > width - half ? 'end' : 'middle'
-    const candidate: PlacedLabel = { ...label, anchor }
+  const fits = (candidate: PlacedLabel): boolean => {
     const [left, right] = extent(candidate)
-    const free = placed.every((other) => {
-      const [otherLeft, otherRight] = extent(other)
-      return right + GAP < otherLeft || left - GAP > otherRight
-    })
-    if (free) placed.push(candidate)
+    return left >= 0 && right <= width && placed.every((other) => areApart(extent(other), [left, right]))
+  }
+  for (const label of [...labels].sort((a, b) => b.importance - a.importance)) {
+    const found = ANCHORS.map((anchor) => ({ ...label, anchor })).find(fits)
+    if (found) placed.push(found)
   }
   return placed.sort((a, b) => a.x - b.x)
 }
+
+const areApart = ([left, right]: [number, number], [otherLeft, otherRight]: [number, number]): boolean =>
+  right + GAP <= otherLeft || left - GAP >= otherRight
 
 /** Everything the line has to span: its range, and the window where that reaches farther. */
 export const spanOf = (range: TemperatureWindow, window: TemperatureWindow): TemperatureWindow => ({
@@ -52,9 +56,9 @@ export const spanOf = (range: TemperatureWindow, window: TemperatureWindow): Tem
   coldGeV: Math.min(range.coldGeV, window.coldGeV),
 })
 
-/** The epochs that lie on the line. */
-export const epochsWithin = (epochs: readonly EpochMark[], span: TemperatureWindow): EpochMark[] =>
-  epochs.filter(({ temperatureGeV }) => temperatureGeV <= span.hotGeV && temperatureGeV >= span.coldGeV)
+/** Whether a temperature, GeV, lies on the line. */
+export const isWithin = (temperatureGeV: number, span: TemperatureWindow): boolean =>
+  temperatureGeV <= span.hotGeV && temperatureGeV >= span.coldGeV
 
 const UNITS: readonly (readonly [unit: string, seconds: number])[] = [
   ['Gyr', 3.15576e16],

@@ -146,9 +146,9 @@ function Bench({ address, session, chosenHistory, chosenCandidate, baseline }: B
       />
       <main
         id="main"
-        className="grid md:grid-cols-[minmax(17rem,19.5rem)_minmax(0,1fr)] xl:grid-cols-[19.5rem_minmax(0,1fr)_18.5rem]"
+        className="grid md:grid-cols-[minmax(17rem,20.5rem)_minmax(0,1fr)] xl:grid-cols-[20.5rem_minmax(0,1fr)_18.5rem]"
       >
-        <div className="order-2 border-rule px-4 py-5 sm:px-7 md:order-1 md:border-r">
+        <div className="order-2 border-rule px-4 py-5 md:order-1 md:border-r md:pr-5 md:pl-7">
           <div className="md:hidden">
             <Button onClick={() => setDrawer(!drawer)} aria-expanded={drawer} className="w-full">
               {drawer ? 'Hide assumptions and candidate' : 'Assumptions and candidate'}

@@ -8,6 +8,7 @@ import { CopyDigest } from '../records/CopyDigest.tsx'
 import { Loaded } from '../records/Loaded.tsx'
 import { Moment } from '../records/Moment.tsx'
 import { Page } from '../records/Page.tsx'
+import { QUIET_LINK } from '../records/quietLink.ts'
 import { Section } from '../records/Section.tsx'
 import { revisionText } from './evaluationColumns.tsx'
 import { EvaluatedInputs } from './EvaluatedInputs.tsx'
@@ -73,14 +74,11 @@ function Heading({ evaluation: { history, candidate, author, createdAt } }: { ev
         </Link>
       </p>
       <h1 className="break-words">
-        <Link to={`/histories/${history.recordId}?revision=${history.number}`} className="hover:text-ember">
+        <Link to={`/histories/${history.recordId}?revision=${history.number}`} className={QUIET_LINK}>
           {revisionText(history)}
         </Link>
         {' with '}
-        <Link
-          to={`/candidates/${candidate.recordId}?revision=${candidate.number}`}
-          className="hover:text-ember"
-        >
+        <Link to={`/candidates/${candidate.recordId}?revision=${candidate.number}`} className={QUIET_LINK}>
           {revisionText(candidate)}
         </Link>
       </h1>

@@ -39,13 +39,13 @@ export function Outputs({ result }: { result: AbundanceResult }) {
         </tr>
       </thead>
       <tbody className="rows">
-        {outputsOf(result).map(({ path, label, value, unit }) => (
+        {outputsOf(result).map(({ path, label, value, unit, digits }) => (
           <tr key={path} className="align-baseline">
             <th scope="row" className="py-1.5 pr-4 text-left font-normal" title={path}>
               {label}
             </th>
             <td className="py-1.5 text-right">
-              <Num value={value} digits={8} {...(unit === undefined ? {} : { unit })} />
+              <Num value={value} digits={digits} {...(unit === undefined ? {} : { unit })} />
             </td>
           </tr>
         ))}

@@ -6,6 +6,7 @@ import { Num } from '../../components/ui/Num.tsx'
 import { OmegaH2 } from '../../components/ui/symbols.tsx'
 import { meaningfulDigits } from '../../lib/number.ts'
 import { Moment } from '../records/Moment.tsx'
+import { QUIET_LINK } from '../records/quietLink.ts'
 import type { RecordColumn } from '../records/RecordTable.tsx'
 
 const verdictWords = ({ result }: Evaluation): string => verdict(result.omegaH2, MEASURED_DENSITY).words
@@ -29,7 +30,7 @@ export const EVALUATION_COLUMNS: readonly RecordColumn<Evaluation>[] = [
     heading: <OmegaH2 />,
     sortBy: ({ result }) => result.omegaH2,
     cell: (evaluation) => (
-      <Link to={`/evaluations/${evaluation.id}`} className="text-[1.05em] hover:text-ember">
+      <Link to={`/evaluations/${evaluation.id}`} className={`text-[1.05em] ${QUIET_LINK}`}>
         <Num
           value={evaluation.result.omegaH2}
           digits={meaningfulDigits(evaluation.result.numericalError, 4)}
@@ -39,7 +40,7 @@ export const EVALUATION_COLUMNS: readonly RecordColumn<Evaluation>[] = [
   },
   {
     id: 'verdict',
-    title: 'Against the measured density',
+    title: 'Against measured',
     sortBy: ({ result }) => result.omegaH2 / MEASURED_DENSITY.omegaH2,
     cell: verdictWords,
   },
@@ -48,7 +49,7 @@ export const EVALUATION_COLUMNS: readonly RecordColumn<Evaluation>[] = [
     title: 'History',
     sortBy: ({ history }) => revisionText(history),
     cell: ({ history }) => (
-      <Link to={`/histories/${history.recordId}?revision=${history.number}`} className="hover:text-ember">
+      <Link to={`/histories/${history.recordId}?revision=${history.number}`} className={QUIET_LINK}>
         {revisionText(history)}
       </Link>
     ),
@@ -58,10 +59,7 @@ export const EVALUATION_COLUMNS: readonly RecordColumn<Evaluation>[] = [
     title: 'Candidate',
     sortBy: ({ candidate }) => revisionText(candidate),
     cell: ({ candidate }) => (
-      <Link
-        to={`/candidates/${candidate.recordId}?revision=${candidate.number}`}
-        className="hover:text-ember"
-      >
+      <Link to={`/candidates/${candidate.recordId}?revision=${candidate.number}`} className={QUIET_LINK}>
         {revisionText(candidate)}
       </Link>
     ),

@@ -2,6 +2,7 @@
 import type { ReactNode } from 'react'
 import type { AbundanceResult } from '#core/wire/index'
 import { OmegaH2, SigmaV, XF } from '../../components/ui/symbols.tsx'
+import { meaningfulDigits } from '../../lib/number.ts'
 import { fieldsOf, unitOf } from '../records/fields.ts'
 
 type ParentFreezeOut = NonNullable<AbundanceResult['parentFreezeOut']>
@@ -72,15 +73,24 @@ const LABELS = new Map<string, Label>([
   ]),
 ])
 
+const MOST_DIGITS = 8
+
+const digitsOf = (path: string, { numericalError }: AbundanceResult): number =>
+  path === 'numericalError' ? 2 : meaningfulDigits(numericalError, MOST_DIGITS)
+
 export interface Output {
   path: string
   label: Label
   value: number
   unit: string | undefined
+  /** Significant digits worth showing. */
+  digits: number
 }
 
 /** Every number a result holds, named; the guards are told apart from them. */
 export const outputsOf = (result: AbundanceResult): Output[] =>
   fieldsOf({ ...result, guards: [] }).flatMap(({ path, value }) =>
-    typeof value === 'number' ? [{ path, label: LABELS.get(path) ?? path, value, unit: unitOf(path) }] : [],
+    typeof value === 'number'
+      ? [{ path, label: LABELS.get(path) ?? path, value, unit: unitOf(path), digits: digitsOf(path, result) }]
+      : [],
   )

@@ -2,6 +2,7 @@ import { Link } from 'react-router-dom'
 import type { CandidateRevision, HistoryRevision } from '#core/wire/index'
 import { CopyDigest } from './CopyDigest.tsx'
 import { Moment } from './Moment.tsx'
+import { QUIET_LINK } from './quietLink.ts'
 
 interface RevisionListProps {
   revisions: readonly (HistoryRevision | CandidateRevision)[]
@@ -20,7 +21,7 @@ export function RevisionList({ revisions, shown, baselineId, benchLinkOf }: Revi
             <Link
               to={`?revision=${revision.number}`}
               preventScrollReset
-              className="font-semibold hover:text-ember"
+              className={`font-semibold ${QUIET_LINK}`}
               aria-current={revision.number === shown ? 'true' : undefined}
             >
               Revision {revision.number}

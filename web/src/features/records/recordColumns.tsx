@@ -1,6 +1,7 @@
 import { Link } from 'react-router-dom'
 import type { CandidateSummary, HistorySummary } from '#core/wire/index'
 import { Moment } from './Moment.tsx'
+import { QUIET_LINK } from './quietLink.ts'
 import type { RecordColumn } from './RecordTable.tsx'
 
 /** The columns histories and candidates share; the name leads. */
@@ -13,7 +14,7 @@ export function recordColumns<T extends HistorySummary | CandidateSummary>(
       title: 'Name',
       sortBy: (record) => record.name,
       cell: (record) => (
-        <Link to={`${folder}/${record.id}`} className="font-serif text-[1.05em] hover:text-ember">
+        <Link to={`${folder}/${record.id}`} className={`font-serif text-[1.05em] ${QUIET_LINK}`}>
           {record.name}
         </Link>
       ),

@@ -1,0 +1,63 @@
+import { describe, expect, it } from 'vitest'
+import { computeAbundance } from '#core/index'
+import { abundanceRequest } from '#core/wire/index'
+import type { AbundanceResult } from '#core/wire/index'
+import { abundanceFixture, relative } from '../fixtures.ts'
+
+/** Reference cases whose input is not taken yet; the list shrinks as the core grows. */
+const NOT_YET: readonly string[] = []
+
+const cases = abundanceFixture.cases.map((each) => [each.name, each] as const)
+const solved = new Map<string, AbundanceResult>()
+const solve = (name: string, input: unknown): AbundanceResult => {
+  const known = solved.get(name) ?? computeAbundance(input)
+  solved.set(name, known)
+  return known
+}
+
+/** x_f and what follows from it: found on the dense output of the integrator, which is of lower order than its end points. */
+const TOLERANCE: Record<string, number> = {
+  omegaH2: 1e-6,
+  yieldToday: 1e-6,
+  freezeOutX: 1e-6,
+  freezeOutTemperatureGeV: 1e-6,
+  sigmaVAtFreezeOutCm3PerS: 1e-6,
+  // Γ/H falls as e^{−x}: twenty times the relative error of x_f.
+  rateOverHubbleAtFreezeOut: 3e-5,
+}
+
+describe('the abundance', () => {
+  it('is taken for every reference case but those listed', () => {
+    const refused = abundanceFixture.cases
+      .filter((each) => !abundanceRequest.safeParse(each.input).success)
+      .map((each) => each.name)
+    expect(refused).toEqual(NOT_YET)
+  })
+
+  it.each(cases.filter(([name]) => !NOT_YET.includes(name)))(
+    'agrees with independent solvers to 1e-6: %s',
+    (name, { input, outputs }) => {
+      const result = solve(name, input) as unknown as Record<string, number>
+      for (const [field, expected] of Object.entries(outputs)) {
+        if (typeof expected !== 'number') continue
+        expect(relative(result[field]!, expected), field).toBeLessThan(TOLERANCE[field] ?? 1e-6)
+      }
+    },
+  )
+
+  it('states its numerical error honestly: 95 % of the cases lie within it, and typically it is not a hundredfold too large', () => {
+    const judged = cases
+      .filter(([name]) => !NOT_YET.includes(name))
+      .map(([name, { input, outputs, accuracy }]) => {
+        const result = solve(name, input)
+        const actual = relative(result.omegaH2, outputs['omegaH2']!)
+        return {
+          within: actual <= result.numericalError + accuracy,
+          ratio: result.numericalError / Math.max(actual, accuracy),
+        }
+      })
+    expect(judged.filter((each) => each.within).length / judged.length).toBeGreaterThanOrEqual(0.95)
+    const ratios = judged.map((each) => each.ratio).sort((a, b) => a - b)
+    expect(ratios[ratios.length >> 1]).toBeLessThan(100)
+  })
+})

@@ -1,0 +1,107 @@
+import { cleanup, fireEvent, screen, within } from '@testing-library/react'
+import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
+import CandidatePage from '../../../../web/src/features/records/CandidatePage.tsx'
+import HistoryPage from '../../../../web/src/features/records/HistoryPage.tsx'
+import {
+  aCandidate,
+  aHistory,
+  candidateRecordOf,
+  evaluationOf,
+  historyRecordOf,
+  renderPage,
+  serve,
+  sessionOf,
+  uuid,
+} from './support.tsx'
+
+const KINATION = { expansion: { kind: 'fluid', index: 2, equalityTemperatureGeV: 0.5 } }
+const region = (name: string | RegExp) => screen.findByRole('region', { name })
+
+afterEach(() => {
+  cleanup()
+  vi.unstubAllGlobals()
+})
+
+describe('the page of a history', () => {
+  beforeEach(() => {
+    const kination = aHistory(KINATION)
+    const later = aHistory({ ...KINATION, maximumTemperatureGeV: 50 })
+    serve({
+      [`/histories/${uuid(100)}`]: { body: historyRecordOf(100, 'Stiff start', aHistory(), kination, later) },
+      '/session': { body: sessionOf(uuid(102)) },
+      '/evaluations': { body: { items: [evaluationOf(1)], next: null } },
+    })
+  })
+  const show = (search = '') => renderPage(HistoryPage, '/histories/:id', `/histories/${uuid(100)}${search}`)
+
+  it('tells the newest revision in words and in numbers', async () => {
+    show()
+    const assumptions = await region('Assumptions of revision 3')
+    expect(assumptions.textContent).toContain('kination, equal to radiation at 500 MeV')
+    const bound = within(assumptions).getByRole('rowheader', { name: 'maximumTemperatureGeV' })
+    expect(bound.closest('tr')!.textContent).toContain('50 GeV')
+  })
+
+  it('tells an older revision when its number is in the address', async () => {
+    show('?revision=1')
+    expect((await region('Assumptions of revision 1')).textContent).toContain('not bounded')
+  })
+
+  it('lists every revision with its note and the way to the Bench, and marks the baseline', async () => {
+    show()
+    const items = within(await region('Revisions')).getAllByRole('listitem')
+    expect(items.map((item) => within(item).getByText(/^note of/).textContent)).toEqual([
+      'note of 3',
+      'note of 2',
+      'note of 1',
+    ])
+    expect(within(items[1]!).getByRole('link', { name: 'open on the Bench' }).getAttribute('href')).toBe(
+      `/bench?history=${uuid(100)}@2`,
+    )
+    const mark = await screen.findByText('baseline of the group')
+    expect(items.map((item) => item.contains(mark))).toEqual([false, true, false])
+  })
+
+  it('holds the newest two revisions side by side, or any two chosen', async () => {
+    show()
+    const changed = within(await region('What changed'))
+    const paths = () => changed.getAllByRole('rowheader').map((cell) => cell.textContent)
+    expect(paths()).toEqual(['maximumTemperatureGeV'])
+    fireEvent.change(changed.getByRole('combobox', { name: 'From' }), { target: { value: '1' } })
+    expect(paths()).toContain('expansion.equalityTemperatureGeV')
+    fireEvent.change(changed.getByRole('combobox', { name: 'To' }), { target: { value: '1' } })
+    expect(changed.getByText('These two are the same in every field.')).toBeDefined()
+  })
+
+  it('lists the evaluations that use it', async () => {
+    show()
+    const uses = await region('Evaluations that use it')
+    expect(await within(uses).findByRole('link', { name: '0.1205' })).toBeDefined()
+  })
+
+  it('copies a whole digest', async () => {
+    const writeText = vi.fn(() => Promise.resolve())
+    vi.stubGlobal('navigator', { clipboard: { writeText } })
+    show()
+    const revisions = within(await region('Revisions'))
+    fireEvent.click(revisions.getAllByRole('button', { name: /Copy the whole digest/ })[0]!)
+    expect(await revisions.findByText('copied')).toBeDefined()
+    expect(writeText).toHaveBeenCalledWith('ab12'.repeat(16))
+  })
+})
+
+describe('the page of a candidate', () => {
+  it('tells its particle with units', async () => {
+    serve({ [`/candidates/${uuid(200)}`]: { body: candidateRecordOf(200, 'Thermal', aCandidate()) } })
+    renderPage(CandidatePage, '/candidates/:id', `/candidates/${uuid(200)}`)
+    const particle = within(await region('Particle of revision 1'))
+    const rate = particle.getByRole('rowheader', { name: 'annihilation.sWaveCm3PerS' }).closest('tr')!
+    expect(rate.textContent).toContain('2.2 × 10−26 cm³/s')
+  })
+
+  it('says what is wrong when there is no such candidate', async () => {
+    serve({})
+    renderPage(CandidatePage, '/candidates/:id', `/candidates/${uuid(200)}`)
+    expect((await screen.findByRole('alert')).textContent).toContain('Not found')
+  })
+})
