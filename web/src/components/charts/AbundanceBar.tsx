@@ -16,7 +16,7 @@ interface AbundanceBarProps {
 
 const HEIGHT = 60
 const LINE = 32
-const MARGIN = 12
+const MARGIN = 18
 const PX_PER_LABEL = 52
 
 /** Room the words "too much" need beside the measured mark, px. */

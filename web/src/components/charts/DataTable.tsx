@@ -9,9 +9,9 @@ export function DataTable({ series }: { series: readonly Series[] }) {
   const grid = [...(series[0]?.curve.temperatureGeV ?? [])]
   const every = Math.max(1, Math.ceil(grid.length / MOST_ROWS))
   return (
-    <div className="max-h-72 overflow-auto border-y border-rule">
+    <div className="overflow-x-auto border-y border-rule">
       <table className="w-full text-small">
-        <thead className="sticky top-0 bg-paper text-left text-soft">
+        <thead className="text-left text-soft">
           <tr>
             <th scope="col" className="pr-4 font-normal">
               <i className="font-serif">T</i>

@@ -30,7 +30,7 @@ export interface LineChartProps {
 const LEFT = 46
 
 /** Room above the frame for the symbol of the values. */
-const TOP = 24
+const TOP = 28
 const RIGHT = 108
 const RIGHT_NARROW = 12
 const RATIO_HEIGHT = 64

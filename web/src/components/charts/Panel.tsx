@@ -93,7 +93,7 @@ function Axes({ x, y, temperatureLabels, caption, symbol, reference }: PanelProp
           ))
         : null}
       {symbol ? (
-        <text x={0} y={y.range[1] - 11} className="font-serif text-[14px] italic" fill="var(--ink)">
+        <text x={0} y={y.range[1] - 14} className="font-serif text-[14px] italic" fill="var(--ink)">
           {symbol}
         </text>
       ) : null}
