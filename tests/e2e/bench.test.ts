@@ -64,8 +64,9 @@ async function signIn(page: Page, name: RegExp): Promise<void> {
 async function abundanceShown(page: Page, before?: number): Promise<number> {
   const output = page.getByTestId('omega')
   await output.waitFor()
-  const value = `document.querySelector('[data-testid="omega"]')?.getAttribute('data-value')`
-  await page.waitForFunction(`${value} != null && Number(${value}) !== ${before}`)
+  await expect
+    .poll(async () => Number(await output.getAttribute('data-value')), { timeout: 10_000 })
+    .not.toBe(before ?? 0)
   return Number(await output.getAttribute('data-value'))
 }
 
@@ -100,8 +101,7 @@ describe('an author', () => {
     await page.getByLabel('Candidate on the Bench').selectOption({ label: 'Standard WIMP, 100 GeV' })
     await page.getByLabel('History on the Bench').selectOption({ label: '2018 fit with its band' })
     const withFit = await abundanceShown(page)
-    const history = await page.evaluate('location.search')
-    expect(history).toContain('history=')
+    await expect.poll(() => page.url()).toContain('history=')
 
     // Each line shows its own factor against the baseline before anything is changed.
     const bathLine = page.getByRole('button', { name: /^Bath/ })
@@ -170,7 +170,7 @@ describe('an author', () => {
     const before = await abundanceShown(page)
     await page.getByLabel('Mass', { exact: true }).fill('321')
     const changed = await abundanceShown(page, before)
-    await page.waitForFunction("location.search.includes('draft=')")
+    await expect.poll(() => page.url(), { timeout: 10_000 }).toContain('draft=')
     await page.reload()
     expect(await abundanceShown(page)).toBe(changed)
     expect(await page.getByLabel('Mass', { exact: true }).inputValue()).toBe('321')

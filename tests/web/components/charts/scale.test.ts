@@ -48,7 +48,7 @@ describe('ticks', () => {
   })
 
   it('are round on a linear axis', () => {
-    expect(labelled(linearTicks([0, 115], 5))).toEqual([0, 25, 50, 75, 100])
+    expect(labelled(linearTicks([0, 115], 5))).toEqual([0, 20, 40, 60, 80, 100])
     expect(labelled(linearTicks([0.78, 1.22], 3))).toEqual([0.8, 1, 1.2])
   })
 

@@ -15,7 +15,7 @@ export function ChartMenu({ title, svg, series, tableShown, onTable }: ChartMenu
   const withDrawing = (use: (svg: SVGSVGElement) => void) => () => {
     if (svg.current) use(svg.current)
   }
-  const action = 'px-1 py-0.5 hover:text-ember'
+  const action = 'min-h-[24px] min-w-[24px] px-1 hover:text-ember'
   return (
     <span
       className="flex gap-1.5 text-caption text-soft"

@@ -22,7 +22,7 @@ export function Legend({ series, hidden, onToggle, cursorGeV }: LegendProps) {
             <button
               type="button"
               aria-pressed={shown}
-              className="flex items-center gap-1.5 hover:text-ink aria-[pressed=false]:line-through"
+              className="flex min-h-[24px] items-center gap-1.5 hover:text-ink aria-[pressed=false]:line-through"
               onClick={() => onToggle(each.id)}
             >
               <svg aria-hidden="true" width="22" height="6" opacity={shown ? 1 : 0.4}>

@@ -1,10 +1,11 @@
+import { Axis, Grid } from '@visx/visx'
 import { useId, useMemo } from 'react'
 import { TemperatureTick, TickNumber, needsPowers } from './AxisLabels.tsx'
 import { EndLabels } from './EndLabels.tsx'
 import type { Mark, Series } from './series.ts'
 import { pathData, stretches } from './curvePath.ts'
-import { inside, linearTicks, logTicks, position } from './scale.ts'
-import type { AxisScale } from './scale.ts'
+import { inside, linearTicks, logTicks, position, visxScale } from './scale.ts'
+import type { AxisScale, Tick } from './scale.ts'
 
 interface PanelProps {
   x: AxisScale
@@ -58,47 +59,76 @@ export function Panel(props: PanelProps) {
   )
 }
 
+const valueTick = (powers: boolean) =>
+  function ValueTick({ x, y, formattedValue }: Axis.TickRendererProps) {
+    return (
+      <text x={x} y={y} dy="0.34em" dx={-5} textAnchor="end" fill="var(--soft)">
+        <TickNumber value={Number(formattedValue)} powers={powers} />
+      </text>
+    )
+  }
+const POWER_TICK = valueTick(true)
+const PLAIN_TICK = valueTick(false)
+
+const temperatureTick = ({ x, y, formattedValue }: Axis.TickRendererProps) => (
+  <text x={x} y={y} dy="0.5em" textAnchor="middle" fill="var(--soft)">
+    <TemperatureTick temperatureGeV={Number(formattedValue)} />
+  </text>
+)
+
 function Axes({ x, y, temperatureLabels, caption, symbol, reference }: PanelProps) {
-  const xTicks = logTicks(x.domain, Math.floor((x.range[1] - x.range[0]) / PX_PER_TEMPERATURE_LABEL)).filter(
-    (tick) => tick.major,
-  )
+  const width = x.range[1] - x.range[0]
   const height = y.range[0] - y.range[1]
+  const major = (ticks: Tick[]): number[] => ticks.filter((tick) => tick.major).map((tick) => tick.value)
+  const xTicks = major(logTicks(x.domain, Math.floor(width / PX_PER_TEMPERATURE_LABEL)))
   const wanted = Math.max(FEWEST_VALUES, Math.floor(height / PX_PER_VALUE_LABEL))
-  const yTicks = (y.kind === 'log' ? logTicks(y.domain, wanted) : linearTicks(y.domain, wanted)).filter(
-    (tick) => tick.major,
-  )
-  const powers = y.kind === 'log' && needsPowers(yTicks.map((tick) => tick.value))
+  const yTicks = major(y.kind === 'log' ? logTicks(y.domain, wanted) : linearTicks(y.domain, wanted))
+  const [xScale, yScale] = [visxScale(x), visxScale(y)]
   return (
-    <g className="text-[12px]" shapeRendering="crispEdges" fill="var(--soft)">
-      {xTicks.map(({ value }) => (
-        <path key={value} d={`M${position(x, value)} ${y.range[1]}V${y.range[0]}`} stroke="var(--grid)" />
-      ))}
-      {yTicks.map(({ value }) => (
-        <path key={value} d={`M${x.range[0]} ${position(y, value)}H${x.range[1]}`} stroke="var(--grid)" />
-      ))}
+    <g className="text-[12px]">
+      <Grid.GridColumns
+        scale={xScale}
+        tickValues={xTicks}
+        top={y.range[1]}
+        height={height}
+        stroke="var(--grid)"
+      />
+      <Grid.GridRows
+        scale={yScale}
+        tickValues={yTicks}
+        left={x.range[0]}
+        width={width}
+        stroke="var(--grid)"
+      />
       {reference === undefined ? null : (
         <path d={`M${x.range[0]} ${position(y, reference)}H${x.range[1]}`} stroke="var(--faint)" />
       )}
-      {yTicks.map(({ value }) => (
-        <text key={value} x={x.range[0] - 8} y={position(y, value)} dy="0.34em" textAnchor="end">
-          <TickNumber value={value} powers={powers} />
-        </text>
-      ))}
-      <path d={`M${x.range[0]} ${y.range[0]}H${x.range[1]}`} stroke="var(--faint)" />
-      {temperatureLabels
-        ? xTicks.map(({ value }) => (
-            <text key={value} x={position(x, value)} y={y.range[0] + 17} textAnchor="middle">
-              <TemperatureTick temperatureGeV={value} />
-            </text>
-          ))
-        : null}
+      <Axis.AxisLeft
+        scale={yScale}
+        tickValues={yTicks}
+        left={x.range[0]}
+        hideAxisLine
+        hideTicks
+        tickLength={3}
+        tickFormat={String}
+        tickComponent={y.kind === 'log' && needsPowers(yTicks) ? POWER_TICK : PLAIN_TICK}
+      />
+      <Axis.AxisBottom
+        scale={xScale}
+        tickValues={temperatureLabels ? xTicks : []}
+        top={y.range[0]}
+        stroke="var(--faint)"
+        hideTicks
+        tickFormat={String}
+        tickComponent={temperatureTick}
+      />
       {symbol ? (
         <text x={0} y={y.range[1] - 14} className="font-serif text-[14px] italic" fill="var(--ink)">
           {symbol}
         </text>
       ) : null}
       {caption ? (
-        <text x={x.range[1]} y={y.range[1] - 4} textAnchor="end">
+        <text x={x.range[1]} y={y.range[1] - 4} textAnchor="end" fill="var(--soft)">
           {caption}
         </text>
       ) : null}

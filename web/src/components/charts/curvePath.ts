@@ -1,5 +1,5 @@
 import type { Curve } from '#core/bench/types'
-import { position } from './scale.ts'
+import { positions } from './scale.ts'
 import type { AxisScale } from './scale.ts'
 
 /** A stretch of a curve without gaps, in pixels. */
@@ -12,9 +12,11 @@ const FARTHEST = 4000
 export function stretches({ temperatureGeV, value }: Curve, x: AxisScale, y: AxisScale): Stretch[] {
   const found: Stretch[] = []
   let open: Stretch = []
+  const across = positions(x)
+  const up = positions(y)
   temperatureGeV.forEach((temperature, i) => {
-    const at = position(x, temperature)
-    const height = position(y, value[i]!)
+    const at = across(temperature)
+    const height = up(value[i]!)
     if (Number.isFinite(at) && (Number.isFinite(height) || value[i] === 0)) {
       const bounded = Number.isFinite(height) ? height : y.range[0] + FARTHEST
       open.push([at, Math.max(-FARTHEST, Math.min(FARTHEST, bounded))])

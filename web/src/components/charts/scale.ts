@@ -1,3 +1,5 @@
+import { Scale } from '@visx/visx'
+
 /** Axes as plain functions: geometry first, drawing after. */
 export interface AxisScale {
   kind: 'log' | 'linear'
@@ -5,19 +7,23 @@ export interface AxisScale {
   range: readonly [number, number]
 }
 
+/** The scale as the drawing library knows it. */
+export function visxScale({ kind, domain, range }: AxisScale) {
+  const config = { domain: [...domain], range: [...range] }
+  return kind === 'log' ? Scale.scaleLog<number>(config) : Scale.scaleLinear<number>(config)
+}
+
 /** Position of a value; NaN for what a logarithm does not know. */
-export function position({ kind, domain, range }: AxisScale, value: number): number {
-  const [from, to] = kind === 'log' ? [Math.log(domain[0]), Math.log(domain[1])] : domain
-  const at = kind === 'log' ? Math.log(value) : value
-  return range[0] + ((at - from) / (to - from)) * (range[1] - range[0])
+export const position = (axis: AxisScale, value: number): number => positions(axis)(value)
+
+/** The same for many values of one axis. */
+export function positions(axis: AxisScale): (value: number) => number {
+  const scale = visxScale(axis)
+  return (value) => (axis.kind === 'log' && !(value > 0) ? NaN : (scale(value) ?? NaN))
 }
 
 /** The value at a position. */
-export function valueAt({ kind, domain, range }: AxisScale, at: number): number {
-  const share = (at - range[0]) / (range[1] - range[0])
-  if (kind === 'linear') return domain[0] + share * (domain[1] - domain[0])
-  return Math.exp(Math.log(domain[0]) + share * Math.log(domain[1] / domain[0]))
-}
+export const valueAt = (axis: AxisScale, at: number): number => Number(visxScale(axis).invert(at))
 
 /** Whether a position lies in a range, given in either direction, to half a pixel. */
 export const inside = (at: number, [a, b]: readonly [number, number]): boolean =>
@@ -68,11 +74,6 @@ function decades(low: number, high: number, most: number): Tick[] {
 export function linearTicks(domain: readonly [number, number], wanted: number): Tick[] {
   const [low, high] = domain
   if (!(high > low && high - low < Infinity)) return []
-  const rough = (high - low) / wanted
-  const power = 10 ** Math.floor(Math.log10(rough))
-  const step = [1, 2, 2.5, 5, 10].find((factor) => factor * power >= rough)! * power
-  const ticks: Tick[] = []
-  for (let k = Math.ceil(low / step - 1e-9); k * step <= high + 1e-9 * step; k++)
-    ticks.push({ value: Number((k * step).toPrecision(12)), major: true })
-  return ticks
+  const scale = Scale.scaleLinear<number>({ domain: [low, high], range: [0, 1] })
+  return scale.ticks(wanted).map((value) => ({ value, major: true }))
 }
