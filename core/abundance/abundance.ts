@@ -25,7 +25,8 @@ function refuseContradiction({ input }: ThermalHistory): void {
 export function abundance(history: ThermalHistory, candidate: CandidateInput): AbundanceResult {
   refuseContradiction(history)
   const result = mechanismOf(candidate).abundance(history, candidate)
-  if (!(result.omegaH2 > 0 && result.omegaH2 < Infinity)) throw new ConvergenceError('the abundance found is no positive finite number')
+  if (!(result.omegaH2 > 0 && result.omegaH2 < Infinity))
+    throw new ConvergenceError('the abundance found is no positive finite number')
   return isMatterEra(history.expansion) ? { ...result, dilution: history.expansion.dilution } : result
 }
 
