@@ -51,7 +51,8 @@ async function main(): Promise<void> {
   const server = await listen(app, env.host, env.port)
   stopOnSignal(server, close, logger)
   const { port } = server.address() as AddressInfo
-  console.log(`listening on http://${env.host}:${port}`)
+  const host = env.host.includes(':') ? `[${env.host}]` : env.host
+  console.log(`listening on http://${host}:${port}`)
 }
 
 await main()

@@ -98,7 +98,7 @@ describe('a demo file at fault', () => {
 })
 
 describe('every demo candidate in every demo history', () => {
-  it('gives a number: no page of the demo opens on an error', async () => {
+  it('gives a number, but for what is made at a highest temperature that most histories leave open', async () => {
     const { histories, candidates } = await readDemoData()
     for (const history of histories) {
       for (const candidate of candidates) {
@@ -106,7 +106,12 @@ describe('every demo candidate in every demo history', () => {
           history: history.revisions.at(-1)?.input,
           candidate: candidate.revisions.at(-1)?.input,
         }
-        expect(computeAbundance(input).omegaH2, `${candidate.name} in ${history.name}`).toBeGreaterThan(0)
+        const open =
+          candidate.revisions.at(-1)?.input.mechanism === 'freeze-in-ultraviolet' &&
+          input.history?.maximumTemperatureGeV === null
+        if (open) expect(() => computeAbundance(input)).toThrow('history.maximumTemperatureGeV: needed')
+        else
+          expect(computeAbundance(input).omegaH2, `${candidate.name} in ${history.name}`).toBeGreaterThan(0)
       }
     }
   })
