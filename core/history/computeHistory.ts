@@ -4,6 +4,9 @@ import { parseInput } from '../wire/fault.ts'
 import { entropyTodayPerCm3, historyRows, pressureUndefinedBecause } from './rows.ts'
 import { buildHistory } from './thermalHistory.ts'
 
+/** Gauss–Legendre with 16 points on panels of 0.3 in ln T, and matter eras solved to 1e-10. */
+const AGE_QUADRATURE_ERROR = 5e-10
+
 /** Rows of a derived history from the wire: parses, fills defaults in, computes. Rows come in the order of the temperatures. */
 export function computeHistory(input: unknown): HistoryResult {
   const { history: historyParts, temperaturesGeV } = parseInput(historyRequest, input)
@@ -12,6 +15,7 @@ export function computeHistory(input: unknown): HistoryResult {
   return {
     rows: historyRows(history, temperaturesGeV),
     entropyTodayPerCm3: entropyTodayPerCm3(history),
+    numericalError: history.tableError + AGE_QUADRATURE_ERROR,
     ...(why === undefined ? {} : { pressureUndefinedBecause: why }),
   }
 }

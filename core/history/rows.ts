@@ -18,6 +18,29 @@ export function pressureUndefinedBecause(history: ThermalHistory): string | unde
   return 'below 10^0.5 MeV the 2018 fit gives ρ and s only, and p = Ts − ρ does not hold once neutrinos have their own temperature'
 }
 
+/** Step in ln T of the derivative below; its error is of order step², 1e-8. */
+const STEP = 1e-4
+
+/**
+ * (dρ/dT)/(T ds/dT) − 1: how far a fitted or tabulated whole bath is from dρ = T ds, which a bath of one temperature obeys
+ * exactly. Zero for a treatment defined by a pressure; null where the bath has no single temperature.
+ */
+function identityResidual(history: ThermalHistory, temperatureGeV: number): number | null {
+  const { bath } = history.radiation
+  const whole = history.input.bath.treatment === 'fit-2018' || history.input.bath.treatment === 'lattice-2016'
+  const point = emptyPoint()
+  bath.evaluate(temperatureGeV, point)
+  if (Number.isNaN(point.gP) || temperatureGeV < history.input.neutrinos.decouplingTemperatureGeV) return null
+  if (!whole) return 0
+  const { gRho, gS, gSSlope } = point
+  bath.evaluate(temperatureGeV * Math.exp(STEP), point)
+  const hot = point.gRho
+  bath.evaluate(temperatureGeV * Math.exp(-STEP), point)
+  const gRhoSlope = (hot - point.gRho) / (2 * STEP)
+  // In units of π²T⁴/90: ρ = 3 g_ρ and Ts = 4 g_s.
+  return (3 * (4 * gRho + gRhoSlope)) / (4 * (3 * gS + gSSlope)) - 1
+}
+
 /** a/a₀ = (s₀/(s e^{lnDilution}))^{1/3}: entropy still to be released makes a smaller. */
 export function scaleFactor(history: ThermalHistory, point: ExpansionPoint): number {
   return Math.cbrt(history.entropyToday / (Math.exp(point.lnDilution) * point.entropy))
@@ -64,6 +87,7 @@ export function historyRows(history: ThermalHistory, temperaturesGeV: readonly n
       scaleFactor: a,
       equationOfState: defined ? pressure / energy : null,
       soundSpeedSquared: barotropic ? 1 / (3 + logSlope) : null,
+      identityResidual: identityResidual(history, temperature),
       waveFrequencyHz: (a * hubble) / (2 * Math.PI) / HBAR_GEV_S,
       horizonMassSolar: ((4 * Math.PI) / 3) * (energy / hubble ** 3 / SOLAR_MASS_GEV),
       ...(temperature < LATE_GEV ? { matterDensityGeV4: matter, darkEnergyDensityGeV4: darkEnergy } : {}),

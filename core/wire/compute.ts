@@ -91,6 +91,9 @@ export const historyRow = z
     scaleFactor: z.number().describe('a/a₀'),
     equationOfState: undefinedHere.describe('w = p/ρ'),
     soundSpeedSquared: undefinedHere.describe('dp/dρ at fixed composition'),
+    identityResidual: undefinedHere.describe(
+      '(dρ/dT)/(T ds/dT) − 1 of the bath: what a fitted or tabulated bath misses of dρ = T ds',
+    ),
     waveFrequencyHz: z.number().describe('Present-day frequency of a wave entering the horizon, Hz'),
     horizonMassSolar: z.number().describe('Mass inside the Hubble radius, solar masses'),
     matterDensityGeV4: z.number().optional(),
@@ -103,6 +106,9 @@ export const historyResult = z
   .object({
     rows: z.array(historyRow),
     entropyTodayPerCm3: z.number(),
+    numericalError: z
+      .number()
+      .describe('Estimated relative error of the ages; the other columns are exact to 1e-10'),
     pressureUndefinedBecause: z.string().optional(),
   })
   .meta({ id: 'HistoryResult' })

@@ -99,14 +99,17 @@ describe('an author', () => {
     await signIn(page, /Mateo/)
 
     await page.getByLabel('Candidate on the Bench').selectOption({ label: 'Standard WIMP, 100 GeV' })
+    await page.getByLabel('History on the Bench').selectOption({ label: 'Kination until 1.15 GeV' })
+    await page.getByText('fluid equals radiation').waitFor()
+    await page.screenshot({ path: `${PICTURES}/readme.png` })
     await page.getByLabel('History on the Bench').selectOption({ label: '2018 fit with its band' })
+    await page.getByText('fluid equals radiation').waitFor({ state: 'detached' })
     const withFit = await abundanceShown(page)
     await expect.poll(() => page.url()).toContain('history=')
 
     // Each line shows its own factor against the baseline before anything is changed.
     const bathLine = page.getByRole('button', { name: /^Bath/ })
     expect(await bathLine.textContent()).toMatch(/× 0\.9\d+/)
-    await page.screenshot({ path: `${PICTURES}/bench-day.png` })
     await saveEvaluation(page, '')
 
     await bathLine.click()

@@ -122,6 +122,19 @@ describe('a derived history', () => {
     }
   })
 
+  it('reports what the fit misses of thermodynamics: up to 4 % near 150 MeV, nothing for a bath defined by its pressure', () => {
+    const residuals = (treatment: string, temperaturesGeV: number[]): (number | null)[] =>
+      computeHistory({ history: { bath: { treatment } }, temperaturesGeV }).rows.map(
+        (row) => row.identityResidual,
+      )
+    const grid = Array.from({ length: 60 }, (_, i) => 0.13 + i * 0.001)
+    const largest = Math.max(...residuals('fit-2018', grid).map((residual) => Math.abs(residual!)))
+    expect(largest).toBeGreaterThan(0.01)
+    expect(largest).toBeLessThan(0.05)
+    expect(residuals('crossover', [0.15, 1])).toEqual([0, 0])
+    expect(residuals('fit-2018', [1e-3])).toEqual([null])
+  })
+
   it('says why a pressure is missing, and null stands where it is', () => {
     const result = computeHistory({ history: {}, temperaturesGeV: [1e-3, 1] })
     expect(result.rows[0]!.pressureGeV4).toBeNull()

@@ -1,0 +1,96 @@
+import { describe, expect, it } from 'vitest'
+import { emptyPoint } from '#core/bath/bath'
+import type { BathPoint } from '#core/bath/bath'
+import { buildBath } from '#core/bath/buildBath'
+import { LATTICE_2016_TABLE } from '#core/bath/treatments/lattice2016Table'
+import { historyInput } from '#core/wire/index'
+import { relative } from '../fixtures.ts'
+
+function bathAt(bath: object, temperatureGeV: number): BathPoint {
+  const parsed = historyInput.parse({ bath })
+  const point = emptyPoint()
+  buildBath(parsed.bath, parsed.neutrinos, []).evaluate(temperatureGeV, point)
+  return point
+}
+const fit = (band: number, T: number): BathPoint => bathAt({ treatment: 'fit-2018', band }, T)
+
+/** 10^0.5 MeV and 10^5.45 MeV, the rows between which the table is used. */
+const [LOWEST, LAST] = [10 ** -2.5, 10 ** 2.45]
+const inside = [0.004, 0.05, 0.13, 0.16, 1, 30, 250]
+
+describe('the band of the 2018 fit', () => {
+  it('is the 2016 table at +1 and its mirror image at −1, inside the table', () => {
+    for (const T of inside) {
+      const table = bathAt({ treatment: 'lattice-2016' }, T)
+      const [centre, up, down] = [fit(0, T), fit(1, T), fit(-1, T)]
+      for (const name of ['gRho', 'gS'] as const) {
+        expect(relative(up[name], table[name]), `${name} at ${T}`).toBeLessThan(1e-14)
+        expect(relative((up[name] + down[name]) / 2, centre[name]), `${name} at ${T}`).toBeLessThan(1e-14)
+      }
+    }
+  })
+
+  it('fades out over a decade beyond each end of the table, and is half as wide half-way', () => {
+    for (const [end, sign] of [
+      [LOWEST, -1],
+      [LAST, 1],
+    ] as const) {
+      const widthAt = (decades: number): number => {
+        const T = end * 10 ** (sign * decades)
+        return fit(1, T).gS / fit(0, T).gS - 1
+      }
+      // 10z³ − 15z⁴ + 6z⁵ is 1/2 at z = 1/2. The table is read at its end, where the fit differs from itself by rounding.
+      expect(relative(widthAt(0.5), widthAt(0) / 2)).toBeLessThan(1e-10)
+      expect(widthAt(1.0001)).toBe(0)
+    }
+  })
+
+  it('says how the bath is known: the table lies 2.4 to 5 % above the fit between 0.5 and 40 GeV', () => {
+    for (let T = 0.5; T <= 40; T *= 1.2) {
+      const width = fit(1, T).gRho / fit(0, T).gRho - 1
+      expect(width, `T = ${T}`).toBeGreaterThan(0.02)
+      expect(width, `T = ${T}`).toBeLessThan(0.055)
+    }
+  })
+})
+
+describe('the 2016 table', () => {
+  it('is met at every row it is used at (Borsanyi et al. 2016, Table S2)', () => {
+    for (const [logMeV, gRho, ratio] of LATTICE_2016_TABLE.slice(1)) {
+      const point = bathAt({ treatment: 'lattice-2016' }, 10 ** (logMeV - 3))
+      expect(relative(point.gRho, gRho), `10^${logMeV} MeV`).toBeLessThan(1e-12)
+      expect(relative(point.gRho / point.gS, ratio), `10^${logMeV} MeV`).toBeLessThan(1e-12)
+    }
+  })
+
+  it('goes over into the exact content of photons, electrons and neutrinos with a step of 0.03 %', () => {
+    const [warm, cold] = [1 + 1e-9, 1 - 1e-9].map((side) =>
+      bathAt({ treatment: 'lattice-2016' }, LOWEST * side),
+    )
+    expect(relative(cold!.gRho, warm!.gRho)).toBeLessThan(4e-4)
+    expect(relative(cold!.gRho, warm!.gRho)).toBeGreaterThan(1e-5)
+  })
+
+  it('is continuous above its last row, and ends as an ideal gas', () => {
+    const [below, above] = [1 - 1e-9, 1 + 1e-9].map((side) => bathAt({ treatment: 'lattice-2016' }, LAST * side))
+    expect(relative(above!.gRho, below!.gRho)).toBeLessThan(1e-8)
+    const late = bathAt({ treatment: 'lattice-2016' }, 1e8)
+    // (T_last/T)² = 8e-12, and the top quark’s mass is gone as (m/T)².
+    expect(relative(late.gRho, late.gS)).toBeLessThan(1e-9)
+  })
+})
+
+describe('the whole baths', () => {
+  it('need not obey ρ + p = Ts = T dp/dT: the fit’s entropy and energy disagree by up to 4 % near 150 MeV, no more', () => {
+    let worst = 0
+    for (let T = 0.08; T < 0.3; T *= 1.02) {
+      const h = 1e-4
+      const pressure = (t: number): number => fit(0, t).gP * t ** 4
+      const slope = (pressure(T * (1 + h)) - pressure(T * (1 - h))) / (2 * h)
+      // T dp/dT against Ts, in effective numbers: T dp/dT = 4 g_s T⁴ where all is consistent.
+      worst = Math.max(worst, Math.abs(slope / (4 * fit(0, T).gS * T ** 4) - 1))
+    }
+    expect(worst).toBeGreaterThan(0.01)
+    expect(worst).toBeLessThan(0.06)
+  })
+})
