@@ -2,6 +2,7 @@ import type { BenchReport } from '#core/bench/types'
 import { MEASURED_DENSITY } from '#core/constants/measured'
 import { AbundanceBar } from '../../components/charts/AbundanceBar.tsx'
 import { verdict } from '../../components/charts/verdict.ts'
+import { Formula } from '../../components/ui/Formula.tsx'
 import { Disclosure } from '../../components/ui/Disclosure.tsx'
 import { CopyNum, Num } from '../../components/ui/Num.tsx'
 import { OmegaH2 } from '../../components/ui/symbols.tsx'
@@ -113,13 +114,17 @@ export function Workings({ report }: { report: BenchReport }) {
             {report.workings.map((working) => (
               <tr key={working.symbol}>
                 <td className="py-1.5 pr-4">
-                  <i className="font-serif">{working.symbol}</i>{' '}
+                  <i>
+                    <Formula text={working.symbol} />
+                  </i>{' '}
                   <span className="text-soft">{working.name}</span>
                 </td>
                 <td className="py-1.5 pr-4">
                   <Num value={working.value} digits={6} unit={working.unit} />
                 </td>
-                <td className="py-1.5 pr-4 font-serif">{working.formula}</td>
+                <td className="py-1.5 pr-4">
+                  <Formula text={working.formula} />
+                </td>
                 <td className="py-1.5 text-soft">{working.source}</td>
               </tr>
             ))}

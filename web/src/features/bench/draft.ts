@@ -1,5 +1,6 @@
 /** The Bench in its address: what is chosen, what was changed, and the window. */
 import type { CandidateInput, HistoryInput } from '#core/wire/index'
+import { ASSUMPTION_ORDER, BATH_TITLES, MECHANISM_TITLES } from '../../lib/describe.tsx'
 
 /** A record and one of its revisions. */
 export interface RevisionChoice {
@@ -41,6 +42,27 @@ export function encodeDraft(draft: Draft): string {
     .replace(/=+$/, '')
 }
 
+const isObject = (value: unknown): value is Record<string, unknown> =>
+  value !== null && typeof value === 'object'
+
+/** Whether the forms can show it; whether it can be computed from is for the core to say. */
+const isHistory = (value: unknown): boolean =>
+  isObject(value) &&
+  ASSUMPTION_ORDER.every((group) => group in value) &&
+  isObject(value['bath']) &&
+  String(value['bath']['treatment']) in BATH_TITLES
+const isCandidate = (value: unknown): boolean =>
+  isObject(value) && String(value['mechanism']) in MECHANISM_TITLES
+
+/** The parts of a decoded value that are a history and a candidate. */
+function recognised(value: unknown): Draft {
+  if (!isObject(value)) return {}
+  return {
+    ...(isHistory(value['history']) ? { history: value['history'] as HistoryInput } : {}),
+    ...(isCandidate(value['candidate']) ? { candidate: value['candidate'] as CandidateInput } : {}),
+  }
+}
+
 /** The draft in a text, or none when the text is not one: a mangled link still opens. */
 export function decodeDraft(text: string | null): Draft {
   if (!text) return {}
@@ -48,8 +70,7 @@ export function decodeDraft(text: string | null): Draft {
     const bytes = Uint8Array.from(atob(text.replace(/-/g, '+').replace(/_/g, '/')), (letter) =>
       letter.charCodeAt(0),
     )
-    const value: unknown = JSON.parse(new TextDecoder().decode(bytes))
-    return value !== null && typeof value === 'object' ? (value as Draft) : {}
+    return recognised(JSON.parse(new TextDecoder().decode(bytes)))
   } catch {
     return {}
   }
