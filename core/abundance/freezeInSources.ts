@@ -2,6 +2,7 @@
 import { decaySum } from '../bath/speciesTable.ts'
 import { HOTTEST_GEV } from '../history/radiation.ts'
 import type { ThermalHistory } from '../history/thermalHistory.ts'
+import { LeastRecentlyUsed } from '../numerics/leastRecentlyUsed.ts'
 import { lazyPositive } from '../numerics/interpolation/lazyPositive.ts'
 import type { FreezeInScatteringInput, FreezeInUltravioletInput } from '../wire/candidate.ts'
 import type { EquilibriumSpecies } from './equilibrium.ts'
@@ -45,6 +46,37 @@ export const UNBOUNDED_SCATTERING_GEV = 9e15
 
 const REACTION_TOLERANCE = 1e-10
 
+type TabulatedScattering = Extract<FreezeInScatteringInput['scattering'], { incoming: unknown }>
+
+/** σ(√s) of an input, GeV⁻², and where its derivative jumps. */
+function crossSectionOf(scattering: TabulatedScattering): {
+  sigma: (rootS: number) => number
+  knots: number[]
+} {
+  if (scattering.kind === 'table') {
+    const table = logLogTable(scattering.points)
+    return { sigma: (rootS) => zeroOutside(table, rootS), knots: scattering.points.map((point) => point[0]) }
+  }
+  const { crossSectionGeVMinus2, referenceEnergyGeV, exponent } = scattering
+  return { sigma: (rootS) => crossSectionGeVMinus2 * (rootS / referenceEnergyGeV) ** exponent, knots: [] }
+}
+
+const memo = new LeastRecentlyUsed<(temperatureGeV: number) => number>(32)
+
+/** γ e^{√s_min/T}, tabulated as it is asked for, once for each distinct input among the last few dozen. */
+function scaledReactionDensity(
+  scattering: TabulatedScattering,
+  least: number,
+): (temperatureGeV: number) => number {
+  return memo.get(JSON.stringify([scattering, least]), () => {
+    const { sigma, knots } = crossSectionOf(scattering)
+    return lazyPositive(
+      (temperature) => scaledScatteringRate(temperature, sigma, scattering.incoming, least, knots),
+      REACTION_TOLERANCE,
+    )
+  })
+}
+
 /** Collisions 1 + 2 → X + 3; see rates/scatteringRate.ts. */
 export function scatteringSource(
   history: ThermalHistory,
@@ -63,16 +95,7 @@ export function scatteringSource(
   }
   const { incoming } = scattering
   const least = Math.max(incoming[0].massGeV + incoming[1].massGeV, massGeV)
-  const table = scattering.kind === 'table' ? logLogTable(scattering.points) : null
-  const knots = scattering.kind === 'table' ? scattering.points.map((point) => point[0]) : []
-  const sigma = (rootS: number): number => {
-    if (scattering.kind === 'table') return zeroOutside(table!, rootS)
-    return scattering.crossSectionGeVMinus2 * (rootS / scattering.referenceEnergyGeV) ** scattering.exponent
-  }
-  const scaled = lazyPositive(
-    (temperature) => scaledScatteringRate(temperature, sigma, incoming, least, knots),
-    REACTION_TOLERANCE,
-  )
+  const scaled = scaledReactionDensity(scattering, least)
   return {
     scaleGeV: least,
     reactionDensity: (temperature) => scaled(temperature) * Math.exp(-least / temperature),

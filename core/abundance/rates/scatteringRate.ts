@@ -21,10 +21,10 @@ export interface Incoming {
 const FARTHEST = 90
 const CUTS = [0.3, 1, 2.5, 5, 9, 14, 20, 28, 38, 50, 68]
 
-/** Doublings of √s above its least value, in y, up to where the thermal scale takes over. */
-function doublings(leastOverT: number): number[] {
+/** Fourfold steps of √s above its least value, in y, up to where the thermal scale takes over. */
+function fourfolds(leastOverT: number): number[] {
   const cuts: number[] = []
-  for (let ratio = 1.5; leastOverT * (ratio - 1) < 1; ratio *= 2) cuts.push(leastOverT * (ratio - 1))
+  for (let ratio = 2; leastOverT * (ratio - 1) < 1; ratio *= 4) cuts.push(leastOverT * (ratio - 1))
   return cuts
 }
 
@@ -50,7 +50,7 @@ export function scaledScatteringRate(
       sigma(rootS) * (s - sum2) * (s - difference2) * quickScaledBesselK(1, rootS / T) * Math.exp(-y) * 2 * T
     )
   }
-  const edges = edgesWithin(low, high, [...CUTS, ...doublings(leastRootS / T), ...scaledKnots])
+  const edges = edgesWithin(low, high, [...CUTS, ...fourfolds(leastRootS / T), ...scaledKnots])
   return (
     ((one.degreesOfFreedom * two.degreesOfFreedom * T) / (32 * Math.PI ** 4)) *
     panelIntegral(integrand, edges)

@@ -15,15 +15,20 @@ const solve = (name: string, input: unknown): AbundanceResult => {
   return known
 }
 
-/** x_f and what follows from it: found on the dense output of the integrator, which is of lower order than its end points. */
+/** 1e-6 is what the product promises; the reference is good to a few 1e-9. */
 const TOLERANCE: Record<string, number> = {
-  omegaH2: 1e-6,
-  yieldToday: 1e-6,
-  freezeOutX: 1e-6,
-  freezeOutTemperatureGeV: 1e-6,
-  sigmaVAtFreezeOutCm3PerS: 1e-6,
   // Γ/H falls as e^{−x}: twenty times the relative error of x_f.
   rateOverHubbleAtFreezeOut: 3e-5,
+}
+
+/** One output against the reference; a group of outputs, number by number. */
+function expectNear(result: object, field: string, expected: number | Record<string, number>): void {
+  const found = (result as Record<string, unknown>)[field]
+  if (typeof expected === 'number') {
+    expect(relative(found as number, expected), field).toBeLessThan(TOLERANCE[field] ?? 1e-6)
+    return
+  }
+  for (const [name, value] of Object.entries(expected)) expectNear(found as object, name, value)
 }
 
 describe('the abundance', () => {
@@ -37,11 +42,8 @@ describe('the abundance', () => {
   it.each(cases.filter(([name]) => !NOT_YET.includes(name)))(
     'agrees with independent solvers to 1e-6: %s',
     (name, { input, outputs }) => {
-      const result = solve(name, input) as unknown as Record<string, number>
-      for (const [field, expected] of Object.entries(outputs)) {
-        if (typeof expected !== 'number') continue
-        expect(relative(result[field]!, expected), field).toBeLessThan(TOLERANCE[field] ?? 1e-6)
-      }
+      const result = solve(name, input)
+      for (const [field, expected] of Object.entries(outputs)) expectNear(result, field, expected)
     },
   )
 

@@ -51,19 +51,22 @@ describe('every treatment of the bath', () => {
     }
   })
 
-  it.each(blocks)('agrees in g_*^(1/2) and pressure, which is missing in the same places: %s', (_name, block) => {
-    const { rows } = computeHistory({
-      history: historyOf(block),
-      temperaturesGeV: block.rows.map((row) => row.temperatureGeV),
-    })
-    rows.forEach((row, i) => {
-      const expected = block.rows[i]!
-      const at = `T = ${row.temperatureGeV} GeV`
-      expect(relative(row.gStarHalf, expected['gStarHalf']!), at).toBeLessThan(1e-8)
-      if (expected['pressureGeV4'] === undefined) expect(row.pressureGeV4, at).toBeNull()
-      else expect(relative(row.pressureGeV4!, expected['pressureGeV4']), at).toBeLessThan(1e-8)
-    })
-  })
+  it.each(blocks)(
+    'agrees in g_*^(1/2) and pressure, which is missing in the same places: %s',
+    (_name, block) => {
+      const { rows } = computeHistory({
+        history: historyOf(block),
+        temperaturesGeV: block.rows.map((row) => row.temperatureGeV),
+      })
+      rows.forEach((row, i) => {
+        const expected = block.rows[i]!
+        const at = `T = ${row.temperatureGeV} GeV`
+        expect(relative(row.gStarHalf, expected['gStarHalf']!), at).toBeLessThan(1e-8)
+        if (expected['pressureGeV4'] === undefined) expect(row.pressureGeV4, at).toBeNull()
+        else expect(relative(row.pressureGeV4!, expected['pressureGeV4']), at).toBeLessThan(1e-8)
+      })
+    },
+  )
 
   it('counts what the handbooks count: 106.75, 96.25, 86.25, 75.75, 72.25, 61.75, 17.25, 14.25, 10.75 (PDG, Kolb & Turner fig. 3.5)', () => {
     const { bath, neutrinos } = historyInput.parse({ bath: { treatment: 'thresholds' } })

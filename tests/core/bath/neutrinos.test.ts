@@ -56,14 +56,18 @@ describe('neutrinos', () => {
     expect(Math.abs(effectiveNumber(point) - 3.018)).toBeLessThan(5e-4)
   })
 
-  it.each([1, 3, 3.044, 4.5])('end with exactly the N_eff that is specified, %f, and heated entropy', (nEff) => {
-    const point = bathAt({ treatment: 'specified', nEff }, COLD_GEV)
-    expect(relative(effectiveNumber(point), nEff)).toBeLessThan(1e-12)
-    expect(relative(point.gS, 2 + (21 / 11) * (nEff / 3) ** 0.75)).toBeLessThan(1e-12)
-  })
+  it.each([1, 3, 3.044, 4.5])(
+    'end with exactly the N_eff that is specified, %f, and heated entropy',
+    (nEff) => {
+      const point = bathAt({ treatment: 'specified', nEff }, COLD_GEV)
+      expect(relative(effectiveNumber(point), nEff)).toBeLessThan(1e-12)
+      expect(relative(point.gS, 2 + (21 / 11) * (nEff / 3) ** 0.75)).toBeLessThan(1e-12)
+    },
+  )
 
   it('have today’s g_s of 3.909 for three, 3.930 for 3.044 heated, and 3.937 linear, as independent code has', () => {
-    const today = (neutrinos: object): number => entropyNumberToday(historyInput.parse({ neutrinos }).neutrinos)
+    const today = (neutrinos: object): number =>
+      entropyNumberToday(historyInput.parse({ neutrinos }).neutrinos)
     const pairs = [
       [{ treatment: 'instantaneous' }, 3.909, 'g_s today, N_eff=3'],
       [{ treatment: 'specified' }, 3.93, 'g_s today, N_eff=3.044'],
