@@ -1,12 +1,20 @@
 /** The `compute` command: one JSON input on standard input, or one a line, to one result or one a line. */
 import { createInterface } from 'node:readline'
 import { text } from 'node:stream/consumers'
-import { ConvergenceError, computeAbundance, computeHistory } from '#core/index'
+import {
+  ConvergenceError,
+  computeAbundance,
+  computeAttribution,
+  computeHistory,
+  computeSolve,
+} from '#core/index'
 import { InputError, faultLine } from '#core/wire/index'
 
 const QUESTIONS: Record<string, (input: unknown) => unknown> = {
   history: computeHistory,
   abundance: computeAbundance,
+  solve: computeSolve,
+  attribute: computeAttribution,
 }
 
 const USAGE = `usage: npm run --silent compute -- ${Object.keys(QUESTIONS).join('|')} [--lines] < input.json > output.json

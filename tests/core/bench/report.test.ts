@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
-import { benchAnswer } from '#core/index'
-import type { BenchReport, BenchRequest } from '#core/index'
-import { candidateInput, historyInput } from '#core/wire/index'
+import { benchAnswer, computeHistory } from '#core/index'
+import type { BenchReport, BenchRequest, Curve } from '#core/index'
+import { ASSUMPTION_GROUPS, candidateInput, historyInput } from '#core/wire/index'
 import type { CandidateInput } from '#core/wire/index'
 
 const baseline = historyInput.parse({ bath: { treatment: 'thresholds' } })
@@ -66,6 +66,87 @@ describe('what the Bench shows', () => {
     ])
     for (const factor of factors.filter((each) => !each.differs))
       expect([factor.oneAtATime, factor.attributed]).toEqual([1, 1])
+  })
+
+  it('has factors whose product is the ratio when every group differs, in the order of the cards', () => {
+    const other = historyInput.parse({
+      bath: { treatment: 'lattice-2016' },
+      neutrinos: { treatment: 'instantaneous' },
+      extraSpecies: [
+        { name: 'x', degreesOfFreedom: 4, statistics: 'fermion', massGeV: 1, coupling: { kind: 'bath' } },
+      ],
+      expansion: { kind: 'entropy-step', temperatureGeV: 0.1, factor: 3 },
+      maximumTemperatureGeV: 8,
+      today: { temperatureK: 2.73 },
+    })
+    const { factors, result, baselineOmegaH2 } = report({ history: other })
+    expect(factors.map((factor) => factor.group)).toEqual([...ASSUMPTION_GROUPS])
+    expect(factors.every((factor) => factor.differs)).toBe(true)
+    const product = factors.reduce((total, factor) => total * factor.attributed!, 1)
+    expect(product).toBeCloseTo(result.omegaH2 / baselineOmegaH2, 12)
+    // Today's entropy goes as T₀³ whatever else is assumed, so alone and attributed are one number.
+    const today = factors.find((factor) => factor.group === 'today')!
+    expect(today.oneAtATime).toBeCloseTo((2.73 / 2.7255) ** 3, 10)
+    expect(today.attributed).toBeCloseTo(today.oneAtATime!, 10)
+  })
+
+  it('has factors of one throughout when the history is the baseline', () => {
+    const { factors, result, baselineOmegaH2 } = report({ history: baseline })
+    expect(result.omegaH2).toBe(baselineOmegaH2)
+    for (const factor of factors)
+      expect([factor.differs, factor.oneAtATime, factor.attributed]).toEqual([false, 1, 1])
+  })
+
+  it('leaves a factor open that cannot be computed, and answers all the same', () => {
+    // The maximum temperature alone would lie below the matter era of the baseline.
+    const era = { kind: 'early-matter', reheatTemperatureGeV: 1, startTemperatureGeV: 100 }
+    const { factors } = report({
+      baseline: historyInput.parse({ expansion: era }),
+      history: historyInput.parse({ maximumTemperatureGeV: 0.5 }),
+      candidate: candidateInput.parse({ ...wimp, massGeV: 1 }),
+    })
+    const maximum = factors.find((factor) => factor.group === 'maximumTemperatureGeV')!
+    expect([maximum.oneAtATime, maximum.attributed]).toEqual([null, null])
+    expect(factors.find((factor) => factor.group === 'expansion')!.oneAtATime).toBeGreaterThan(0)
+  })
+
+  it('draws every curve over the same temperatures, hot to cold, within the window', () => {
+    const { yieldCurve, ...rest } = report()
+    const temperatures = [...yieldCurve.temperatureGeV]
+    expect(temperatures[0]).toBeCloseTo(window.hotGeV, 9)
+    expect(temperatures.at(-1)).toBeCloseTo(window.coldGeV, 12)
+    for (let i = 1; i < temperatures.length; i++) expect(temperatures[i]).toBeLessThan(temperatures[i - 1]!)
+    const curves = Object.entries(rest).filter(([name]) => name.endsWith('Curve'))
+    expect(curves.length).toBeGreaterThanOrEqual(7)
+    for (const [name, curve] of curves) {
+      expect([...(curve as Curve).temperatureGeV], name).toEqual(temperatures)
+      expect((curve as Curve).value.length, name).toBe(temperatures.length)
+    }
+  })
+
+  it('draws g_ρ as the rows of the history have it, and its ratio to the baseline', () => {
+    const { gRhoCurve, gRhoRatioCurve, baselineGRhoCurve } = report()
+    const { rows } = computeHistory({ history, temperaturesGeV: [...gRhoCurve.temperatureGeV] })
+    rows.forEach((row, i) => {
+      expect(gRhoCurve.value[i]! / row.gRho).toBeCloseTo(1, 8)
+      expect(gRhoRatioCurve.value[i]! * baselineGRhoCurve.value[i]!).toBeCloseTo(gRhoCurve.value[i]!, 10)
+    })
+  })
+
+  it('shows how the number comes about: Ωh² = m Y₀ s₀/(ρ_c/h²) holds among its workings', () => {
+    const { workings, result } = report()
+    const value = (symbol: string): number => workings.find((each) => each.symbol === symbol)!.value
+    const product = (value('m') * value('Y₀') * value('s₀')) / value('ρ_c/h²')
+    expect(product / result.omegaH2).toBeCloseTo(1, 12)
+    for (const working of workings) expect(working.formula && working.source).toBeTruthy()
+  })
+
+  it('looks at every guard that it raises', () => {
+    for (const candidate of candidates) {
+      const { guardsLookedAt, result } = report({ candidate })
+      const codes = guardsLookedAt.map((each) => each.code)
+      for (const guard of result.guards) expect(codes).toContain(guard.code)
+    }
   })
 
   it.each(candidates.map((candidate) => [candidate.mechanism, candidate] as const))(

@@ -21,7 +21,7 @@ const tabulated = [
   ['ħc', HBARC_GEV_CM, 1.973269804e-14, 1e-9, 'CODATA 2018'],
   ['M_Pl', PLANCK_MASS_GEV, 1.22089e19, 1e-6, 'CODATA 2018'],
   ['the reduced M_Pl', PLANCK_MASS_GEV / Math.sqrt(8 * Math.PI), 2.435323e18, 3e-7, 'PDG 2024'],
-  ['the Hubble time for h = 1, s', HBAR_GEV_S / HUBBLE_100_GEV, 3.0856775814913673e17, 1e-14, 'IAU 2015'],
+  ['the Hubble time for h = 1, s', HBAR_GEV_S / HUBBLE_100_GEV, 3.085677581491367e17, 1e-14, 'IAU 2015'],
   ['ρ_c/h²', CRITICAL_DENSITY_GEV4 / HBARC_GEV_CM ** 3, 1.053672e-5, 1e-6, 'PDG 2024'],
   ['1 cm³/s in GeV⁻²', GEV_MINUS2_PER_CM3_S, 1 / 1.1673e-17, 1e-4, 'ħ²c³ from CODATA 2018'],
   ['the solar mass', SOLAR_MASS_GEV, 1.9884e30 / 1.78266192e-27, 5e-5, 'PDG 2024'],

@@ -47,6 +47,16 @@ describe('linear systems', () => {
     )
   })
 
+  it('are solved where every pivot in order is zero, by exchanging rows', () => {
+    // A cyclic shift: x moves by one place, exactly.
+    const matrix = Float64Array.from({ length: N * N }, (_, k) =>
+      k % N === (Math.floor(k / N) + 1) % N ? 1 : 0,
+    )
+    const x = Float64Array.from([1, 2, 3, 4, 5])
+    expect(solveInPlace(matrix, x, N)).toBe(true)
+    expect([...x]).toEqual([5, 1, 2, 3, 4])
+  })
+
   it('are refused when singular or not finite', () => {
     expect(solveInPlace(Float64Array.from([1, 2, 2, 4]), Float64Array.from([1, 1]), 2)).toBe(false)
     expect(solveInPlace(Float64Array.from([NaN, 2, 2, 4]), Float64Array.from([1, 1]), 2)).toBe(false)

@@ -131,19 +131,27 @@ describe('the stiff integrator', () => {
     expect(solution.t).toBeLessThan(15)
   })
 
-  it('restarts a dense solution at a break, so that a jump of the slope costs no digit', () => {
+  it.each([1, -0.5])('restarts a dense solution at a break, at %f, which saves the search for it', (kink) => {
+    let asked = 0
     const kinked: OdeProblem = {
       dimension: 1,
       evaluate(t, y, slope, jacobian) {
-        slope[0] = t < 1 ? y[0]! : -y[0]!
-        jacobian[0] = t < 1 ? 1 : -1
+        asked++
+        slope[0] = t < kink ? y[0]! : -y[0]!
+        jacobian[0] = t < kink ? 1 : -1
       },
     }
-    const solution = denseOde(kinked, 0, [1], { low: -1, high: 2 }, [1], 1e-9)
-    const exact = (t: number): number => Math.exp(t < 1 ? t : 2 - t)
+    const range = { low: -1, high: 2 }
+    const solution = denseOde(kinked, 0, [1], range, [kink], 1e-9)
+    const withBreak = asked
+    // e^{±t} about 0, mirrored at the kink.
+    const side = kink > 0 ? 1 : -1
+    const exact = (t: number): number => Math.exp(side * (side * t < side * kink ? t : 2 * kink - t))
     for (let t = -1; t <= 2; t += 0.013)
       // Twenty times the tolerance of a step, for the polynomial between its ends.
       expect(Math.abs(solution.at(t, 0) - exact(t)), `t = ${t}`).toBeLessThan(2e-8)
+    denseOde(kinked, 0, [1], range, [], 1e-9)
+    expect(asked - withBreak).toBeGreaterThan(2 * withBreak)
   })
 
   it('keeps a dense solution as good as its tolerance between the steps', () => {

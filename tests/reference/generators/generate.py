@@ -1,4 +1,4 @@
-"""Writes the JSON files of this folder:  python3 generate.py [species bath history rates abundance attribution inverse published merge]"""
+"""Writes the JSON files of the folder above:  python3 generate.py [species bath history rates abundance attribution inverse published merge]"""
 import itertools, json, math, sys, os, time
 from multiprocessing import Pool
 import numpy as np, scipy, mpmath as mp
@@ -10,7 +10,7 @@ from history import History, EarlyMatter, MatterFromVacuum
 import rates as RT
 import relic as R
 
-HERE = os.path.dirname(os.path.abspath(__file__))
+HERE = os.path.dirname(os.path.dirname(os.path.abspath(__file__)))  # the folder of the JSON files, above this one
 VERSIONS = {"python": sys.version.split()[0], "numpy": np.__version__, "scipy": scipy.__version__, "mpmath": mp.__version__}
 NU = {"specified": {"treatment": "specified", "nEff": 3.044, "decouplingTemperatureGeV": 0.002, "entropyScaling": "heated"},
       "instantaneous": {"treatment": "instantaneous", "decouplingTemperatureGeV": 0.002}}

@@ -1,0 +1,30 @@
+import { abundance } from '../abundance/abundance.ts'
+import { buildHistory } from '../history/thermalHistory.ts'
+import { attributeRequest } from '../wire/attribution.ts'
+import type { AttributeResult } from '../wire/attribution.ts'
+import { parseInput } from '../wire/fault.ts'
+import { ASSUMPTION_GROUPS } from '../wire/history.ts'
+import type { AssumptionGroup, HistoryInput } from '../wire/history.ts'
+import { attribute } from './attribution.ts'
+
+const partsOf = (lnFactors: Record<AssumptionGroup, number>): AttributeResult['parts'] =>
+  ASSUMPTION_GROUPS.map((group) => ({
+    group,
+    lnFactor: lnFactors[group],
+    factor: Math.exp(lnFactors[group]),
+  }))
+
+/** Attributes the ratio of two abundances from the wire: parses, fills defaults in, computes every subset. */
+export function computeAttribution(input: unknown): AttributeResult {
+  const { baseline, variant, candidate } = parseInput(attributeRequest, input)
+  const omegaH2Of = (history: HistoryInput): number => abundance(buildHistory(history), candidate).omegaH2
+  const { lnRatio, lnFactors, oneAtATime } = attribute(baseline, variant, omegaH2Of)
+  const baselineOmegaH2 = omegaH2Of(baseline)
+  return {
+    baselineOmegaH2,
+    variantOmegaH2: baselineOmegaH2 * Math.exp(lnRatio),
+    ratio: Math.exp(lnRatio),
+    parts: partsOf(lnFactors),
+    oneAtATime: partsOf(oneAtATime),
+  }
+}
