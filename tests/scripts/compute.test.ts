@@ -1,5 +1,6 @@
 import { spawnSync } from 'node:child_process'
-import { computeAbundance } from '#core/index'
+import { computeAbundance, computeSolve } from '#core/index'
+import type { AttributeResult } from '#core/wire/index'
 import { expect, it } from 'vitest'
 
 const INPUT = {
@@ -46,4 +47,18 @@ it('ends with status 2 on bad input, a line for each fault on standard error and
   const { status, stdout, stderr } = compute(['abundance'], JSON.stringify(faulty))
   expect({ status, stdout }).toEqual({ status: 2, stdout: '' })
   expect(stderr).toMatch(/^candidate\.massGeV: allowed: .*\(found -1\)$/m)
+})
+
+it('answers the inverse question and the attribution as the core does', () => {
+  const inverse = { ...INPUT, solveFor: 'candidate.annihilation.sWaveCm3PerS', between: [1e-27, 1e-25] }
+  expect(JSON.parse(compute(['solve'], JSON.stringify(inverse)).stdout)).toEqual(computeSolve(inverse))
+  const change = {
+    baseline: { bath: { treatment: 'thresholds' } },
+    variant: { expansion: { kind: 'fluid', index: 2, equalityTemperatureGeV: 1.15 } },
+    candidate: INPUT.candidate,
+  }
+  const { ratio, parts } = JSON.parse(
+    compute(['attribute'], JSON.stringify(change)).stdout,
+  ) as AttributeResult
+  expect(parts.reduce((product, part) => product * part.factor, 1)).toBeCloseTo(ratio, 10)
 })
