@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest'
+import { guardsLookedAt } from '#core/abundance/guards/guard'
 import { computeAbundance } from '#core/index'
+import { candidateInput } from '#core/wire/index'
 
 const wimp = {
   mechanism: 'freeze-out',
@@ -15,6 +17,13 @@ const fimp = {
   statistics: 'fermion',
   parent: { massGeV: 300, degreesOfFreedom: 1, statistics: 'boson', lifetimeS: 1e-7 },
 }
+const hotRelic = (decouplingTemperatureGeV: number) => ({
+  mechanism: 'hot-relic',
+  massGeV: 0.01,
+  degreesOfFreedom: 2,
+  statistics: 'fermion',
+  decouplingTemperatureGeV,
+})
 
 const raised = (history: unknown, candidate: unknown) => computeAbundance({ history, candidate }).guards
 
@@ -119,6 +128,22 @@ const pairs: readonly (readonly [code: string, raises: [unknown, unknown], quiet
       },
     ],
   ],
+  [
+    'unitarity',
+    [{}, { ...wimp, massGeV: 3e5, annihilation: { kind: 'partial-waves', sWaveCm3PerS: 2.4e-26 } }],
+    [{}, { ...wimp, massGeV: 1e5, annihilation: { kind: 'partial-waves', sWaveCm3PerS: 2.4e-26 } }],
+  ],
+  [
+    'not-cold',
+    [{}, { ...wimp, annihilation: { kind: 'partial-waves', sWaveCm3PerS: 1e-36 } }],
+    [{}, { ...wimp, annihilation: { kind: 'partial-waves', sWaveCm3PerS: 1e-33 } }],
+  ],
+  [
+    'decay-near-freeze-out',
+    [{}, { ...fimp, parent: { ...fimp.parent, lifetimeS: 1e-8, annihilation: wimp.annihilation } }],
+    [{}, { ...fimp, parent: { ...fimp.parent, lifetimeS: 1e-5, annihilation: wimp.annihilation } }],
+  ],
+  ['not-hot', [{}, hotRelic(0.005)], [{}, hotRelic(0.02)]],
   ['production-cut-off', [{ maximumTemperatureGeV: 40 }, fimp], [{ maximumTemperatureGeV: 1e4 }, fimp]],
   ['late-decay', [{}, { ...fimp, parent: { ...fimp.parent, lifetimeS: 1 } }], [{}, fimp]],
   ['structure-formation', [{}, { ...fimp, massGeV: 3e-6 }], [{}, fimp]],
@@ -131,6 +156,14 @@ describe('guards', () => {
     const found = guards.find((guard) => guard.code === code)
     expect(found, guards.map((guard) => guard.code).join()).toBeDefined()
     expect(raised(...quiet).map((guard) => guard.code)).not.toContain(code)
+  })
+
+  it('are each tried here, whatever mechanism they belong to', () => {
+    const mechanisms = candidateInput.options.map((option) => option.shape.mechanism.value)
+    const known = new Set(
+      mechanisms.flatMap((mechanism) => guardsLookedAt(mechanism).map(({ code }) => code)),
+    )
+    expect([...known].sort()).toEqual(pairs.map(([code]) => code).sort())
   })
 
   it('carry message, value, limit and source', () => {
