@@ -11,6 +11,13 @@ import { brent } from '../numerics/roots/brent.ts'
 import type { AnnihilatingState } from './annihilatingState.ts'
 import { integrationFailure } from '../numerics/convergence.ts'
 import { panelRule } from './freezeOutEffort.ts'
+import {
+  annihilated,
+  followingYield,
+  linearProblem,
+  logarithmicProblem,
+  steadyYield,
+} from './freezeOutEquations.ts'
 import type { Effort } from './freezeOutEffort.ts'
 import { Sampler } from './yieldSamples.ts'
 import type { YieldSamples } from './yieldSamples.ts'
@@ -72,36 +79,6 @@ function lnYield(state: AnnihilatingState, lnX: number, lnZ: number): number {
   return lnZ + state.lnDilution
 }
 
-/** y = ln Z: y′ = (k Z_eq² + P)/Z − k (Z + η). */
-function logarithmicProblem(state: AnnihilatingState): OdeProblem {
-  return {
-    dimension: 1,
-    evaluate(lnX, y, slope, jacobian) {
-      state.moveTo(lnX)
-      const loss = state.strength * Math.exp(y[0]!)
-      const lossToMajority = state.strength * state.asymmetry
-      let gain = state.strength * Math.exp(2 * state.lnEquilibrium - y[0]!)
-      if (state.production > 0) gain += state.production * Math.exp(-y[0]!)
-      slope[0] = gain - loss - lossToMajority
-      jacobian[0] = -gain - loss
-    },
-  }
-}
-
-/** The same in Z/unit, for a start from nothing, where ln Z does not exist. */
-function linearProblem(state: AnnihilatingState, unit: number): OdeProblem {
-  return {
-    dimension: 1,
-    evaluate(lnX, y, slope, jacobian) {
-      state.moveTo(lnX)
-      slope[0] =
-        (state.strength * Math.exp(2 * state.lnEquilibrium) + state.production) / unit -
-        state.strength * unit * y[0]! * y[0]!
-      jacobian[0] = -2 * state.strength * unit * y[0]!
-    },
-  }
-}
-
 /** ln of k times the number of partners, over x and over 12: positive where equilibrium is certain. */
 function certainty(state: AnnihilatingState, lnX: number): number {
   state.moveTo(lnX)
@@ -123,26 +100,6 @@ function lastCertainty(state: AnnihilatingState, from: number): number {
     lateExcess = earlyExcess
   }
   return from
-}
-
-/** ln Z that follows equilibrium to first order in H/Γ. */
-function followingYield(state: AnnihilatingState, lnX: number): number {
-  const h = 1e-3
-  state.moveTo(lnX + h)
-  const after = steadyYield(state)
-  state.moveTo(lnX)
-  const now = steadyYield(state)
-  const lag = -(after - now) / h / (state.strength * (2 * Math.exp(now) + state.asymmetry))
-  return now + Math.log1p(Math.max(0, Math.min(lag, 1)))
-}
-
-/** ln Z at which gain and loss balance: Z (Z + η) = Z_eq² + P/k. */
-function steadyYield(state: AnnihilatingState): number {
-  const { asymmetry, production, strength, lnEquilibrium } = state
-  if (asymmetry === 0 && production === 0) return lnEquilibrium
-  const square = Math.exp(2 * lnEquilibrium) + production / strength
-  if (asymmetry > 0 && square < 1e-200) return 2 * lnEquilibrium - Math.log(asymmetry)
-  return Math.log(square / (Math.sqrt(square + (asymmetry / 2) ** 2) + asymmetry / 2))
 }
 
 function solveStretch(run: Run, problem: OdeProblem, y: number, to: number, options: OdeOptions): number {
@@ -211,13 +168,6 @@ function whileProduced(run: Run): Outcome {
     if (outcome !== 'go on') return outcome
   }
   return 'go on'
-}
-
-/** Z after ∫ k d ln x without production: 1/Z grows by it; with an asymmetry, ln(1 + η/Z) grows by η times it. */
-function annihilated(z: number, asymmetry: number, integral: number): number {
-  return asymmetry === 0
-    ? 1 / (1 / z + integral)
-    : asymmetry / Math.expm1(Math.log1p(asymmetry / z) + asymmetry * integral)
 }
 
 /** What annihilation still does without production. */

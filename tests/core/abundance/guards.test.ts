@@ -135,8 +135,8 @@ const pairs: readonly (readonly [code: string, raises: [unknown, unknown], quiet
   ],
   [
     'not-cold',
-    [{}, { ...wimp, annihilation: { kind: 'partial-waves', sWaveCm3PerS: 1e-36 } }],
-    [{}, { ...wimp, annihilation: { kind: 'partial-waves', sWaveCm3PerS: 1e-33 } }],
+    [{}, { ...wimp, startX: 0.01, annihilation: { kind: 'partial-waves', sWaveCm3PerS: 1e-37 } }],
+    [{}, { ...wimp, startX: 0.01, annihilation: { kind: 'partial-waves', sWaveCm3PerS: 1e-33 } }],
   ],
   [
     'decay-near-freeze-out',

@@ -228,12 +228,3 @@ describe('an asymmetric candidate', () => {
     expect(relative(omega({}, candidate(1e-20, 2.2e-26)), omega({}, symmetric))).toBeLessThan(3e-7)
   })
 })
-
-describe('the unitarity guard', () => {
-  it('speaks above about 100 TeV (Griest & Kamionkowski 1990)', () => {
-    const codes = (mass: number, sigmaV: number): string[] =>
-      computeAbundance({ history: {}, candidate: sWave(mass, sigmaV) }).guards.map((guard) => guard.code)
-    expect(codes(1e5, 2.4e-26)).not.toContain('unitarity')
-    expect(codes(3e5, 2.4e-26)).toContain('unitarity')
-  })
-})

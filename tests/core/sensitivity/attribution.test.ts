@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { abundance, buildHistory } from '#core/index'
+import { abundance, buildHistory, computeAbundance, computeAttribution } from '#core/index'
 import { attribute } from '#core/sensitivity/attribution'
 import { shapleyValues } from '#core/sensitivity/shapley'
 import { candidateInput, historyInput } from '#core/wire/index'
@@ -63,6 +63,37 @@ describe('Shapley values', () => {
 })
 
 describe('attribution between two histories', () => {
+  it('the other way round has the same parts with the other sign', () => {
+    const { input } = attributionFixture.cases[0]!
+    const there = computeAttribution(input)
+    const back = computeAttribution({ ...input, baseline: input.variant, variant: input.baseline })
+    there.parts.forEach((part, i) => {
+      expect(back.parts[i]!.group).toBe(part.group)
+      expect(Math.abs(back.parts[i]!.lnFactor + part.lnFactor)).toBeLessThan(1e-12)
+    })
+    expect(Math.abs(back.ratio * there.ratio - 1)).toBeLessThan(1e-12)
+  })
+
+  it('of a history with itself has factors of one', () => {
+    const { input } = attributionFixture.cases[0]!
+    const { ratio, parts, oneAtATime } = computeAttribution({ ...input, variant: input.baseline })
+    expect(ratio).toBe(1)
+    for (const part of [...parts, ...oneAtATime]) expect([part.lnFactor, part.factor]).toEqual([0, 1])
+  })
+
+  it('has the two abundances, their ratio, and factors whose product is the ratio, from the wire', () => {
+    for (const { input, outputs } of attributionFixture.cases) {
+      const { baselineOmegaH2, variantOmegaH2, ratio, parts } = computeAttribution(input)
+      // Two abundances good to 1e-8 or so each; 1e-7 is what is promised of the factors.
+      expect(Math.abs(ratio / outputs.ratio - 1)).toBeLessThan(1e-7)
+      expect(Math.abs(variantOmegaH2 / baselineOmegaH2 / ratio - 1)).toBeLessThan(1e-12)
+      const product = parts.reduce((total, part) => total * part.factor, 1)
+      expect(Math.abs(product / ratio - 1)).toBeLessThan(1e-12)
+      const { omegaH2 } = computeAbundance({ history: input.variant, candidate: input.candidate })
+      expect(Math.abs(variantOmegaH2 / omegaH2 - 1)).toBeLessThan(1e-12)
+    }
+  })
+
   const cases = attributionFixture.cases.map((each) => [each.name, each] as const)
 
   it.each(cases)('agrees with independent factors to 1e-7: %s', (_name, { input, outputs }) => {

@@ -1,5 +1,5 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query'
-import { lazy, Suspense, useEffect, useMemo, useState } from 'react'
+import { lazy, Suspense, useMemo, useState } from 'react'
 import { Link, useLocation } from 'react-router-dom'
 import type { BenchRequest } from '#core/bench/types'
 import type { CandidateRevision, HistoryRevision, SessionInfo } from '#core/wire/index'
@@ -12,6 +12,8 @@ import { BenchCharts } from './BenchCharts.tsx'
 import { CandidatePanel } from './CandidatePanel.tsx'
 import { FaultProvider } from './faults.tsx'
 import { HistoryPanel } from './HistoryPanel.tsx'
+import { Problems } from './Problems.tsx'
+import { SaveBar } from './SaveBar.tsx'
 import { Trail } from './Trail.tsx'
 import { Facts, WhatMovedIt } from './WhatMovedIt.tsx'
 import { readAddress } from './draft.ts'
@@ -20,6 +22,7 @@ import { baselineQuery, chosenCandidateQuery, chosenHistoryQuery } from './revis
 import type { Chosen } from './revisions.ts'
 import { useBenchAnswer } from './useBenchAnswer.ts'
 import { LAST_ADDRESS, useDraft } from './useDraft.ts'
+import { useUndoKeys } from './useUndoKeys.ts'
 
 const SaveDialog = lazy(() => import('./SaveDialog.tsx'))
 
@@ -216,75 +219,4 @@ function Bench({ address, session, chosenHistory, chosenCandidate, baseline }: B
       ) : null}
     </FaultProvider>
   )
-}
-
-/** What the core found wrong, and that the numbers shown are those from before. */
-function Problems({ view }: { view: ReturnType<typeof useBenchAnswer> }) {
-  if (view.failure !== null)
-    return (
-      <p role="alert" className="border-l-2 border-fault pl-3">
-        No converged number: {view.failure}. What is shown below is the last one that was reached.
-      </p>
-    )
-  if (view.faults.length === 0) return null
-  return (
-    <div role="alert" className="border-l-2 border-fault pl-3">
-      <p>This input cannot be computed; what is shown below is the last that could.</p>
-      <ul>
-        {view.faults.map((fault) => (
-          <li key={fault.path + fault.message} className="text-small text-fault">
-            <code className="font-mono">{fault.path}</code>: {fault.message}
-          </li>
-        ))}
-      </ul>
-    </div>
-  )
-}
-
-interface SaveBarProps {
-  session: SessionInfo
-  draft: ReturnType<typeof useDraft>
-  ready: boolean
-  onSave: () => void
-}
-
-function SaveBar({ session, draft, ready, onSave }: SaveBarProps) {
-  const changed = draft.historyChanged || draft.candidateChanged
-  const reader = session.role === 'reader'
-  return (
-    <div className="flex flex-wrap items-center gap-x-4 gap-y-2 pt-6">
-      <Button variant="primary" disabled={reader || !ready} onClick={onSave}>
-        {changed ? 'Save revision' : 'Save evaluation'}
-      </Button>
-      <Button variant="link" disabled={!draft.canUndo} onClick={draft.undo}>
-        Undo
-      </Button>
-      <Button variant="link" disabled={!draft.canRedo} onClick={draft.redo}>
-        Redo
-      </Button>
-      {changed ? (
-        <Button variant="link" onClick={draft.reset}>
-          Drop changes
-        </Button>
-      ) : null}
-      {reader ? (
-        <p className="basis-full text-small text-soft">Readers compute freely; authors and leads save.</p>
-      ) : null}
-    </div>
-  )
-}
-
-/** ⌘/Ctrl-Z and ⌘/Ctrl-Shift-Z, outside of text fields, which have an undo of their own. */
-function useUndoKeys(undo: () => void, redo: () => void): void {
-  useEffect(() => {
-    const onKey = (event: KeyboardEvent): void => {
-      const inText = event.target instanceof HTMLElement && event.target.closest('input, textarea') !== null
-      if (inText || event.key.toLowerCase() !== 'z' || !(event.ctrlKey || event.metaKey)) return
-      event.preventDefault()
-      if (event.shiftKey) redo()
-      else undo()
-    }
-    addEventListener('keydown', onKey)
-    return () => removeEventListener('keydown', onKey)
-  }, [undo, redo])
 }
