@@ -6,21 +6,24 @@ const WEB = ['tests/web/**/*.test.{ts,tsx}']
 const SCRIPTS = ['tests/scripts/**/*.test.{ts,mjs}']
 const E2E = ['tests/e2e/**/*.test.ts']
 
+const setupFiles = ['tests/support/fastCheck.ts']
+
 /** These drive whole programs on a machine of two cores: one file at a time, after everything else. */
 const wholePrograms = { testTimeout: 180_000, hookTimeout: 300_000, maxWorkers: 1 }
 
 export default defineConfig({
   test: {
     projects: [
-      { test: { name: 'core', include: CORE, sequence: { groupOrder: 0 } } },
+      { test: { name: 'core', include: CORE, setupFiles, sequence: { groupOrder: 0 } } },
       {
         plugins: [react()],
-        test: { name: 'web', include: WEB, environment: 'jsdom', sequence: { groupOrder: 0 } },
+        test: { name: 'web', include: WEB, setupFiles, environment: 'jsdom', sequence: { groupOrder: 0 } },
       },
       {
         // Whatever is in no other project, so that no test is left out for standing in a new folder.
         test: {
           name: 'node',
+          setupFiles,
           include: ['tests/**/*.test.{ts,tsx,mjs}'],
           exclude: [...CORE, ...WEB, ...SCRIPTS, ...E2E],
           globalSetup: ['tests/support/globalSetup.ts'],
