@@ -5,16 +5,17 @@ import type { CandidateInput } from '../wire/candidate.ts'
 import { abundanceRequest } from '../wire/compute.ts'
 import type { AbundanceResult } from '../wire/compute.ts'
 import { InputError, parseInput } from '../wire/fault.ts'
+import { maximumTemperatureFault } from '../wire/history.ts'
 import { ConvergenceError } from '../numerics/convergence.ts'
 import { mechanismOf } from './mechanisms/mechanisms.ts'
 
-/** A maximum temperature below the reheating that follows a matter era contradicts it. */
+/** A history mixed from two others may contradict itself where neither of them does. */
 function refuseContradiction({ input }: ThermalHistory): void {
-  const { expansion, maximumTemperatureGeV } = input
-  if (expansion.kind !== 'early-matter' || maximumTemperatureGeV === null) return
-  if (maximumTemperatureGeV >= expansion.reheatTemperatureGeV) return
-  const message = `allowed: at least the reheating temperature of the matter era, ${expansion.reheatTemperatureGeV} GeV`
-  throw new InputError([{ path: 'history.maximumTemperatureGeV', value: maximumTemperatureGeV, message }])
+  const message = maximumTemperatureFault(input)
+  if (message !== null)
+    throw new InputError([
+      { path: 'history.maximumTemperatureGeV', value: input.maximumTemperatureGeV, message },
+    ])
 }
 
 /**

@@ -46,6 +46,9 @@ const LN_DEPARTURE = Math.log(2.5)
  */
 const LN_CERTAIN = Math.log(12)
 
+/** ln of how many times more than certain a start from nothing is to come to equilibrium at once, within 1e-4 of an e-fold. */
+const LN_AT_ONCE = Math.log(1e4)
+
 /** Gain over loss at which production is dropped: the relative error made. */
 const LN_NEGLIGIBLE = Math.log(1e-12)
 
@@ -238,6 +241,7 @@ export function solveFreezeOut(
   state.moveTo(lnStart)
   const rateAtStart = state.strength * Math.exp(state.lnEquilibrium)
   if (fromEquilibrium) followEquilibrium(run, lnStart)
+  else if (certainty(state, lnStart) > LN_AT_ONCE) followEquilibrium(run, lnStart)
   else leaveZero(run)
   let outcome = whileProduced(run)
   if (outcome === 'in equilibrium') {

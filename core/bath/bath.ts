@@ -14,6 +14,8 @@ export interface BathPoint {
 export interface BathPart {
   /** Temperatures, GeV, where a value or one of its first derivatives jumps. */
   readonly breaks: readonly number[]
+  /** Temperatures, GeV, around which it changes within a fraction of an e-fold: where a table has to look closely. */
+  readonly sharp?: readonly number[]
   /** Writes the part at temperature T, GeV, into `out`. At a step the cold side is taken. */
   evaluate(temperatureGeV: number, out: BathPoint): void
 }

@@ -26,6 +26,9 @@ export function entropyNumberToday(neutrinos: NeutrinosInput): number {
   return linear ? 2 + (7 / 11) * nEff : 2 + (21 / 11) * (nEff / 3) ** 0.75
 }
 
+/** T/T_ν − 1 late, below which decoupling came after everything that could heat the photons. */
+const NOTHING_TO_HEAT = 1e-9
+
 /** Adds neutrinos to a plasma that shares the photons' temperature. */
 export function withNeutrinos(plasma: BathPart, neutrinos: NeutrinosInput): BathPart {
   const decoupling = neutrinos.decouplingTemperatureGeV
@@ -41,6 +44,7 @@ export function withNeutrinos(plasma: BathPart, neutrinos: NeutrinosInput): Bath
 
   return {
     breaks: [...plasma.breaks, decoupling],
+    sharp: plasma.sharp ?? [],
     evaluate(temperatureGeV, out) {
       plasma.evaluate(temperatureGeV, out)
       if (temperatureGeV >= decoupling) {
@@ -51,8 +55,10 @@ export function withNeutrinos(plasma: BathPart, neutrinos: NeutrinosInput): Bath
       }
       const logSlope = out.gSSlope / out.gS
       const ratio = Math.cbrt(out.gS / gAtDecoupling)
-      const growth = (1 / ratio - 1) / (1 / lateRatio - 1)
-      const growthSlope = -logSlope / 3 / ratio / (1 / lateRatio - 1)
+      // With nothing left to heat the photons, T_ν stays at T and the late values hold at once.
+      const heated = 1 / lateRatio - 1
+      const growth = heated < NOTHING_TO_HEAT ? 1 : (1 / ratio - 1) / heated
+      const growthSlope = heated < NOTHING_TO_HEAT ? 0 : -logSlope / 3 / ratio / heated
       const energy = NEUTRINO_G * (1 + (lateEnergy - 1) * growth) * ratio ** 4
       const inEntropy = 1 + (lateEntropy - 1) * growth
       out.gRho += energy

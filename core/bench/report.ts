@@ -7,6 +7,8 @@ import { ages } from '../history/time.ts'
 import { buildHistory } from '../history/thermalHistory.ts'
 import type { ThermalHistory } from '../history/thermalHistory.ts'
 import { attribute, differingGroups, withGroups } from '../sensitivity/attribution.ts'
+import { z } from 'zod'
+import { temperatureGeV } from '../wire/numbers.ts'
 import { candidateInput } from '../wire/candidate.ts'
 import type { CandidateInput } from '../wire/candidate.ts'
 import type { AbundanceResult } from '../wire/compute.ts'
@@ -102,6 +104,23 @@ function timesOf(history: ThermalHistory, { hotGeV, coldGeV }: BenchRequest['win
   return ages(history, temperatures).map((timeS, i) => ({ temperatureGeV: temperatures[i]!, timeS }))
 }
 
+/** Temperatures a chart can be drawn between, GeV. */
+const benchWindow = z
+  .object({ hotGeV: temperatureGeV, coldGeV: temperatureGeV })
+  .refine(({ hotGeV, coldGeV }) => hotGeV > coldGeV, { path: ['coldGeV'], message: 'allowed: below hotGeV' })
+
+/** What is wrong with the baseline is said of the baseline. */
+function asBaseline<T>(compute: () => T): T {
+  try {
+    return compute()
+  } catch (error) {
+    if (!(error instanceof InputError)) throw error
+    throw new InputError(
+      error.faults.map((fault) => ({ ...fault, path: fault.path.replace(/^history/, 'baseline') })),
+    )
+  }
+}
+
 /** The report for parsed inputs. @throws InputError, ConvergenceError */
 export function benchReport({
   history: input,
@@ -112,12 +131,13 @@ export function benchReport({
   const history = buildHistory(input)
   const baseline = buildHistory(baselineInput)
   const result = abundance(history, candidate)
+  const baselineOmegaH2 = asBaseline(() => abundance(baseline, candidate).omegaH2)
   const grid = temperatureGrid(window.hotGeV, window.coldGeV, [history, baseline])
   const numbers = effectiveNumberCurves(history, grid)
   const baselineNumbers = effectiveNumberCurves(baseline, grid)
   return {
     result,
-    baselineOmegaH2: abundance(baseline, candidate).omegaH2,
+    baselineOmegaH2,
     band: bandOf(input, candidate),
     factors: factorsOf(baselineInput, input, candidate),
     guardsLookedAt: guardsLookedAt(candidate.mechanism),
@@ -142,9 +162,15 @@ export function benchReport({
 
 /** Answers a request as it comes from a form: bad input comes back as faults with paths, never as an exception. */
 export function benchAnswer(request: BenchRequest): BenchAnswer {
+  if (typeof request !== 'object' || request === null)
+    return {
+      status: 'refused',
+      faults: [{ path: '', message: 'allowed: an object with history, baseline, candidate and window' }],
+    }
   const history = historyInput.safeParse(request.history)
   const candidate = candidateInput.safeParse(request.candidate)
   const baseline = historyInput.safeParse(request.baseline)
+  const window = benchWindow.safeParse(request.window)
   const faults = [
     ...(history.success
       ? []
@@ -155,14 +181,16 @@ export function benchAnswer(request: BenchRequest): BenchAnswer {
     ...(baseline.success
       ? []
       : faultsOf(baseline.error, request.baseline).map((fault) => under('baseline', fault))),
+    ...(window.success ? [] : faultsOf(window.error, request.window).map((fault) => under('window', fault))),
   ]
-  if (!history.success || !candidate.success || !baseline.success) return { status: 'refused', faults }
+  if (!history.success || !candidate.success || !baseline.success || !window.success)
+    return { status: 'refused', faults }
   try {
     const report = benchReport({
       history: history.data,
       baseline: baseline.data,
       candidate: candidate.data,
-      window: request.window,
+      window: window.data,
     })
     return { status: 'done', report }
   } catch (error) {

@@ -4,6 +4,7 @@ import { emptyPoint } from '../bath/bath.ts'
 import type { BathPart } from '../bath/bath.ts'
 import { speciesApart } from '../bath/speciesApart.ts'
 import type { SpeciesApart } from '../bath/speciesApart.ts'
+import { ConvergenceError } from '../numerics/convergence.ts'
 import { LeastRecentlyUsed } from '../numerics/leastRecentlyUsed.ts'
 import { tabulate } from '../numerics/interpolation/chebyshev.ts'
 import type { ChebyshevTable } from '../numerics/interpolation/chebyshev.ts'
@@ -27,6 +28,9 @@ export interface Radiation {
   readonly table: ChebyshevTable
 }
 
+/** Error of the table above which no number made with it is given. */
+const UNRESOLVED = 1e-7
+
 /** The parts of a history that its radiation depends on. */
 type RadiationInput = Pick<HistoryInput, 'bath' | 'neutrinos' | 'extraSpecies'>
 
@@ -48,8 +52,12 @@ function buildRadiation({ bath: treatment, neutrinos, extraSpecies }: RadiationI
     3,
     Math.log(COLDEST_GEV),
     Math.log(HOTTEST_GEV),
-    { breaks: breaks.map(Math.log), tolerance: 5e-10 },
+    { breaks: [...breaks, ...(bath.sharp ?? [])].map(Math.log), tolerance: 5e-10, maximumDepth: 14 },
   )
+  if (!(table.error < UNRESOLVED))
+    throw new ConvergenceError(
+      'the bath changes too sharply, or is not defined, somewhere: its table is not resolved',
+    )
   return { bath, apart, breaks, table }
 }
 

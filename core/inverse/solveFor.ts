@@ -21,6 +21,9 @@ const FEWEST = 40
 /** Error allowed in ln of a solution; the abundance itself is good to about 1e-8. */
 const TOLERANCE = 1e-10
 
+/** |ln(Ωh²/target)| at a solution. */
+const REACHED = 1e-6
+
 /** Golden-section steps that narrow a turning point by 1e-4. */
 const TURNING_STEPS = 20
 const GOLDEN = (Math.sqrt(5) - 1) / 2
@@ -101,7 +104,11 @@ export function solveFor(request: SolveRequest): SolveResult {
   for (let i = 0; i + 1 < samples.length; i++) {
     const [a, b] = [samples[i]!, samples[i + 1]!]
     if (a.excess === 0) solutions.push(Math.exp(a.at))
-    else if (a.excess * b.excess < 0) solutions.push(Math.exp(brent(excess, a.at, b.at, TOLERANCE)))
+    else if (a.excess * b.excess < 0) {
+      const root = brent(excess, a.at, b.at, TOLERANCE)
+      // Where the abundance leaps over the target, as in a bath of steps, there is a change of sign and no solution.
+      if (Math.abs(excess(root)) < REACHED) solutions.push(Math.exp(root))
+    }
   }
   if (samples.at(-1)!.excess === 0) solutions.push(Math.exp(samples.at(-1)!.at))
   const nearest = known.reduce((best, sample) =>

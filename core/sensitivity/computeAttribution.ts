@@ -6,6 +6,7 @@ import { parseInput } from '../wire/fault.ts'
 import { ASSUMPTION_GROUPS } from '../wire/history.ts'
 import type { AssumptionGroup, HistoryInput } from '../wire/history.ts'
 import { attribute } from './attribution.ts'
+import { elasticities } from './elasticity.ts'
 
 const partsOf = (lnFactors: Record<AssumptionGroup, number>): AttributeResult['parts'] =>
   ASSUMPTION_GROUPS.map((group) => ({
@@ -26,5 +27,6 @@ export function computeAttribution(input: unknown): AttributeResult {
     ratio: Math.exp(lnRatio),
     parts: partsOf(lnFactors),
     oneAtATime: partsOf(oneAtATime),
+    elasticities: elasticities({ history: variant, candidate }),
   }
 }

@@ -14,12 +14,19 @@ const part = z.object({
   factor: z.number().describe('exp(lnFactor)'),
 })
 
+const elasticity = z.object({
+  path: z.string(),
+  value: z.number().nullable().describe('d ln Ωh²/d ln p; null where the input cannot be moved either way'),
+  error: z.number().nullable().describe('Estimated absolute error of the value'),
+})
+
 export const attributeResult = z
   .object({
     baselineOmegaH2: z.number(),
     variantOmegaH2: z.number(),
     ratio: z.number().describe('Variant over baseline'),
     parts: z.array(part).describe('Exact Shapley parts of ln ratio: the factors’ product is the ratio'),
+    elasticities: z.array(elasticity).describe('Of every continuous input of the variant and the candidate'),
     oneAtATime: z.array(part).describe('The baseline with one group alone taken from the variant'),
   })
   .meta({ id: 'AttributeResult' })

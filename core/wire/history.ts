@@ -105,6 +105,14 @@ const earlyMatterInput = z
     path: ['startTemperatureGeV'],
     message: 'allowed: exactly one of startTemperatureGeV and dilution',
   })
+  .refine(
+    (era) => era.startTemperatureGeV === undefined || era.startTemperatureGeV >= era.reheatTemperatureGeV,
+    {
+      path: ['startTemperatureGeV'],
+      message:
+        'allowed: at least the reheating temperature; a field that decays before it dominates makes no era of matter',
+    },
+  )
   .refine((era) => era.branching === 0 || era.fieldMassGeV !== undefined, {
     path: ['fieldMassGeV'],
     message: 'needed when the field makes candidates: their number is ρ_φ over this mass',
@@ -119,6 +127,14 @@ export const extraSpeciesInput = z
     massGeV: nonNegative.max(1e19).describe('Mass, GeV; zero for radiation'),
     coupling: couplingInput,
   })
+  .refine(
+    ({ massGeV, coupling }) => coupling.kind !== 'decoupled' || massGeV <= 500 * coupling.temperatureGeV,
+    {
+      path: ['coupling', 'temperatureGeV'],
+      message:
+        'allowed: at least a 500th of the mass; colder than that none of the species is left to decouple',
+    },
+  )
   .meta({ id: 'ExtraSpecies' })
 
 export const expansionInput = z
@@ -157,6 +173,17 @@ export const todayInput = z
   })
   .meta({ id: 'Today' })
 
+/** What is wrong with a maximum temperature below the reheating that follows a matter era; null when nothing is. */
+export function maximumTemperatureFault(history: {
+  expansion: z.output<typeof expansionInput>
+  maximumTemperatureGeV: number | null
+}): string | null {
+  const { expansion, maximumTemperatureGeV: maximum } = history
+  if (expansion.kind !== 'early-matter' || maximum === null || maximum >= expansion.reheatTemperatureGeV)
+    return null
+  return `allowed: at least the reheating temperature of the matter era, ${expansion.reheatTemperatureGeV} GeV`
+}
+
 /** One set of thermal-history assumptions. Parsing fills the defaults in, so the parsed value is the whole record. */
 export const historyInput = z
   .strictObject({
@@ -169,6 +196,10 @@ export const historyInput = z
       .default(null)
       .describe('Highest temperature of the bath (instant reheating), GeV; null when not bounded'),
     today: todayInput.prefault({}),
+  })
+  .superRefine((history, context) => {
+    const message = maximumTemperatureFault(history)
+    if (message !== null) context.addIssue({ code: 'custom', path: ['maximumTemperatureGeV'], message })
   })
   .meta({ id: 'History' })
 

@@ -14,10 +14,13 @@ export interface FreezeInFacts {
 
 const KEV = 1e-6
 
+/** Y/Y_eq where Y_eq is too small for a double. */
+const LARGEST_FRACTION = 1e300
+
 /** Guards common to every freeze-in. */
 export function freezeInGuards(facts: FreezeInFacts): Guard[] {
   const guards: Guard[] = []
-  const fraction = facts.yieldToday / facts.equilibriumYield
+  const fraction = Math.min(facts.yieldToday / facts.equilibriumYield, LARGEST_FRACTION)
   if (fraction > 0.1) {
     const message = 'The yield comes near that of equilibrium: the inverse process would lower it.'
     guards.push(

@@ -36,14 +36,18 @@ const startOf = (history: ThermalHistory, candidate: AsymmetricInput) => ({
 export const asymmetric: Mechanism<AsymmetricInput> = {
   abundance(history, candidate) {
     const state = antiparticles(history, candidate)
-    const { value, error } = checkedFreezeOut(history, state, startOf(history, candidate))
+    const { value, error } = checkedFreezeOut(
+      history,
+      state,
+      startOf(history, candidate),
+      ({ yieldToday }) => candidate.asymmetry + 2 * yieldToday,
+    )
     const yieldAntiparticle = value.yieldToday
     const yieldToday = candidate.asymmetry + 2 * yieldAntiparticle
     return {
       omegaH2: relicDensity(history, candidate.massGeV, yieldToday),
       yieldToday,
-      // The asymmetry is exact, so only the symmetric part carries the error.
-      numericalError: (error * 2 * yieldAntiparticle) / yieldToday + 1e-14,
+      numericalError: error,
       yieldParticle: candidate.asymmetry + yieldAntiparticle,
       yieldAntiparticle,
       guards: historyGuards(history),

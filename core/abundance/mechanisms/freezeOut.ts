@@ -45,6 +45,9 @@ export function annihilatingState(history: ThermalHistory, candidate: FreezeOutI
   })
 }
 
+/** x beyond which a problem has no beginning: e^{−x} is nothing. */
+const LATEST_START = 500
+
 /** Where the integration may begin: x = 1 or `startX`, or the maximum temperature when that is colder. */
 export function startX(
   history: ThermalHistory,
@@ -55,6 +58,14 @@ export function startX(
   const refuse = (message: string): never => {
     throw new InputError([{ path: 'candidate.massGeV', value: candidate.massGeV, message }])
   }
+  if (x > LATEST_START && maximum !== null && x === candidate.massGeV / maximum)
+    throw new InputError([
+      {
+        path: 'history.maximumTemperatureGeV',
+        value: maximum,
+        message: `allowed: above a ${LATEST_START}th of the mass; colder, nothing of the candidate is left to decide`,
+      },
+    ])
   if (candidate.massGeV / x > HOTTEST_GEV)
     refuse(`allowed: at most ${HOTTEST_GEV * x} GeV, where the bath's tables end`)
   if (candidate.massGeV / x <= history.temperatureToday * 1.01)
@@ -92,16 +103,17 @@ export function factsAtFreezeOut(state: AnnihilatingState, x: number): Partial<A
   }
 }
 
-/** Solves with rising effort until two agree. */
+/** Solves with rising effort until two agree on the number that counts. */
 export function checkedFreezeOut(
   history: ThermalHistory,
   state: AnnihilatingState,
   start: FreezeOutStart,
+  numberOf: (solution: FreezeOut) => number = (solution) => solution.yieldToday,
 ): { value: FreezeOut; error: number } {
   return checked(
     EFFORTS.length,
     (i) => solveFreezeOut(state, start, EFFORTS[i]!),
-    (solution) => solution.yieldToday,
+    numberOf,
     (i) => history.tableError + LEFT_OF_TOLERANCE * EFFORTS[i]!.tolerance,
   )
 }

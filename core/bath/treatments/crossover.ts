@@ -17,6 +17,9 @@ import type { Particle } from '../particles/species.ts'
 /** ln(T/T_c)/δ beyond which the weight differs from 0 or 1 by less than e^−42. */
 const REACH = 21
 
+/** Where a table looks closely, in units of δ from ln T_c. */
+const CLOSE = [-9, -5, -3, -1.8, -0.9, 0, 0.9, 1.8, 3, 5, 9]
+
 /** w, its complement and dw/d ln T. */
 function blend(lnRatio: number, delta: number): { weight: number; rest: number; slope: number } {
   const z = (2 * lnRatio) / delta
@@ -56,7 +59,7 @@ export function crossover(
   const integral = integrate(
     tabulate((lnT, out) => (out[0] = blendedEntropy(lnT).entropy * Math.exp(4 * (lnT - low))), 1, low, high, {
       tolerance: 1e-13,
-      breaks: Array.from({ length: 7 }, (_, i) => lnTc + (i - 3) * 2 * delta),
+      breaks: CLOSE.map((steps) => lnTc + steps * delta),
     }),
   )
   const scratch = new Float64Array(1)
@@ -84,6 +87,7 @@ export function crossover(
 
   return {
     breaks: [],
+    sharp: CLOSE.map((steps) => Math.exp(lnTc + steps * delta)),
     evaluate(temperatureGeV, out) {
       const jet = strongJet(Math.log(temperatureGeV))
       addGas(jet, always, temperatureGeV)

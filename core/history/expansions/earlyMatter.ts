@@ -15,6 +15,7 @@ import { ConvergenceError } from '../../numerics/convergence.ts'
 import { OdeFailure, denseOde } from '../../numerics/ode/dense.ts'
 import type { DenseSolution } from '../../numerics/ode/dense.ts'
 import { brent } from '../../numerics/roots/brent.ts'
+import { InputError } from '../../wire/fault.ts'
 import type { ExpansionInput } from '../../wire/history.ts'
 import { ENERGY_FACTOR, emptyExpansion, hubbleOf, setRadiation } from '../expansionPoint.ts'
 import type { ExpansionPoint } from '../expansionPoint.ts'
@@ -156,13 +157,27 @@ function eraFromStart(input: EarlyMatterInput, radiation: Radiation, start: numb
   }
 }
 
-/** The start temperature that gives the wanted dilution; the dilution grows with it. */
+/** The start temperature that gives the wanted dilution; the dilution grows with it. @throws InputError out of reach */
 function startForDilution(input: EarlyMatterInput, radiation: Radiation, dilution: number): number {
-  const excess = (lnStart: number): number =>
-    Math.log(eraFromStart(input, radiation, Math.exp(lnStart)).dilution / dilution)
-  // D ≈ T_start/T_RH up to a factor of order one, for matter that dominates.
+  const dilutionFrom = (lnStart: number): number => eraFromStart(input, radiation, Math.exp(lnStart)).dilution
+  const refuse = (bound: string): never => {
+    throw new InputError([
+      {
+        path: 'history.expansion.dilution',
+        value: dilution,
+        message: `allowed: ${bound} for this reheating temperature`,
+      },
+    ])
+  }
+  const excess = (lnStart: number): number => Math.log(dilutionFrom(lnStart) / dilution)
+  // D ≈ T_start/T_RH up to a factor of order one, for matter that dominates; it starts no later than at T_RH.
   const guess = Math.log(input.reheatTemperatureGeV * dilution)
-  return Math.exp(brent(excess, guess - 4, Math.min(guess + 4, Math.log(HOTTEST_GEV) - 1), 1e-11))
+  const low = Math.max(Math.log(input.reheatTemperatureGeV), guess - 4)
+  const high = Math.min(guess + 4, Math.log(HOTTEST_GEV) - 1)
+  if (high <= low || excess(high) < 0)
+    refuse(`at most ${dilutionFrom(Math.log(HOTTEST_GEV) - 1).toPrecision(3)}`)
+  if (excess(low) > 0) refuse(`at least ${dilutionFrom(low).toPrecision(4)}`)
+  return Math.exp(brent(excess, low, high, 1e-11))
 }
 
 export function earlyMatter(input: EarlyMatterInput, radiation: Radiation): MatterEra {
