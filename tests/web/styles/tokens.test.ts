@@ -32,6 +32,11 @@ describe.each(Object.entries(THEMES))('the colours of the %s', (_theme, colours)
     },
   )
 
+  it('set words and links that can be read on the ground of what stands out', () => {
+    for (const name of ['ink', 'ember'])
+      expect(contrast(colours[name]!, colours['ember-wash']!), `--${name}`).toBeGreaterThanOrEqual(4.5)
+  })
+
   it('set the words of a primary button so that they can be read', () => {
     expect(contrast(colours['on-ink']!, colours['ink']!)).toBeGreaterThanOrEqual(4.5)
   })
@@ -55,6 +60,16 @@ describe.each(Object.entries(THEMES))('the colours of the %s', (_theme, colours)
       }))
       .filter(({ difference }) => difference <= SEPARATE)
     expect(close).toEqual([])
+  })
+})
+
+describe('what the browser draws itself, such as lists and scroll bars', () => {
+  it.each([
+    [':root', 'light'],
+    ["[data-theme='night']", 'dark'],
+  ])('is told by %s to be %s, whatever the system is', (selector, scheme) => {
+    const rule = SHEET.slice(SHEET.indexOf(`${selector} {`))
+    expect(rule.slice(0, rule.indexOf('}'))).toContain(`color-scheme: ${scheme};`)
   })
 })
 

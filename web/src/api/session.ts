@@ -3,18 +3,24 @@ import type { PublicInfo, SessionInfo } from '#core/wire/index'
 import { api } from '../lib/api.ts'
 import { ApiProblem } from '../lib/apiProblem.ts'
 
-/** Who is signed in; null when nobody is. */
+/** The session known last; `ended` once the server no longer knows it, so that the page under it can stay. */
+export type KnownSession = SessionInfo & { ended?: true }
+
+const SESSION = ['session'] as const
+
+/** Who is signed in; null when nobody was. */
 export const sessionQuery = queryOptions({
-  queryKey: ['session'],
-  queryFn: async (): Promise<SessionInfo | null> => {
+  queryKey: SESSION,
+  queryFn: async ({ client }): Promise<KnownSession | null> => {
     try {
       return await api<SessionInfo>('GET', '/session')
     } catch (error) {
-      if (error instanceof ApiProblem && error.status === 401) return null
-      throw error
+      if (!(error instanceof ApiProblem && error.status === 401)) throw error
+      const before = client.getQueryData<KnownSession | null>(SESSION)
+      return before ? { ...before, ended: true } : null
     }
   },
-  staleTime: 60_000,
+  staleTime: (query) => (query.state.data?.ended ? 0 : 60_000),
 })
 
 export const infoQuery = queryOptions({

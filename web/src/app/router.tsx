@@ -3,16 +3,19 @@ import type { LoaderFunctionArgs, RouteObject } from 'react-router-dom'
 import { sessionQuery } from '../api/session.ts'
 import { Loading } from './Loading.tsx'
 import { NotFoundPage } from './NotFoundPage.tsx'
+import { signInFor } from './ownAddress.ts'
 import { PageError } from './PageError.tsx'
 import { queryClient } from './queryClient.ts'
 import { Shell } from './Shell.tsx'
 
 /** Pages behind the sign-in send a stranger there, and back to where they wanted to go. */
 async function signedIn({ request }: LoaderFunctionArgs) {
-  const session = await queryClient.ensureQueryData(sessionQuery)
-  if (session) return null
+  const known = await queryClient.ensureQueryData(sessionQuery)
+  // It may have been renewed in another tab.
+  const session = known?.ended ? await queryClient.fetchQuery(sessionQuery) : known
+  if (session && !session.ended) return null
   const { pathname, search } = new URL(request.url)
-  return redirect(`/sign-in?to=${encodeURIComponent(pathname + search)}`)
+  return redirect(signInFor(pathname + search))
 }
 
 type PageModule = { default: React.ComponentType }

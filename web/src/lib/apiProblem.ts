@@ -2,6 +2,8 @@ import type { Fault, Problem } from '#core/wire/index'
 
 /** An error the server explained, as an RFC 9457 problem document. */
 export class ApiProblem extends Error {
+  /** What kind of problem, as the API names it. */
+  readonly type: string
   readonly status: number
   readonly title: string
   readonly requestId: string | undefined
@@ -10,12 +12,17 @@ export class ApiProblem extends Error {
   constructor(problem: Problem) {
     super(problem.detail ?? problem.title)
     this.name = 'ApiProblem'
+    this.type = problem.type
     this.status = problem.status
     this.title = problem.title
     this.requestId = problem.instance
     this.faults = problem.faults ?? []
   }
 }
+
+/** Whether the server answered that nobody is signed in, as when a session has ended meanwhile. */
+export const saysSignedOut = (error: unknown): boolean =>
+  error instanceof ApiProblem && error.type === 'urn:emberline:problem:not-signed-in'
 
 /** The connection failed before the server could say anything. */
 export class ConnectionLost extends Error {

@@ -1,6 +1,7 @@
-import { cleanup, fireEvent, render, screen, within } from '@testing-library/react'
+import { act, cleanup, fireEvent, render, screen, within } from '@testing-library/react'
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
 import { LineChart } from '../../../../web/src/components/charts/LineChart.tsx'
+import { createCursor } from '../../../../web/src/components/charts/cursor.ts'
 import { csvText } from '../../../../web/src/components/charts/exportChart.ts'
 import { usualDomain } from '../../../../web/src/components/charts/series.ts'
 import type { Series } from '../../../../web/src/components/charts/series.ts'
@@ -18,10 +19,11 @@ const SERIES = [series('this history', (t) => 10 * t), series('baseline', (t) =>
 
 const onWindow = vi.fn()
 const onReset = vi.fn()
-const onCursor = vi.fn()
+let cursor = createCursor()
 
-const draw = (cursorGeV: number | null = null, shown: readonly Series[] = SERIES) =>
-  render(
+const draw = (cursorGeV: number | null = null, shown: readonly Series[] = SERIES) => {
+  cursor.move(cursorGeV)
+  return render(
     <LineChart
       title="Yield"
       description="Yield against temperature"
@@ -29,17 +31,20 @@ const draw = (cursorGeV: number | null = null, shown: readonly Series[] = SERIES
       window={{ hotGeV: 100, coldGeV: 0.01 }}
       onWindow={onWindow}
       onReset={onReset}
-      cursorGeV={cursorGeV}
-      onCursor={onCursor}
+      cursor={cursor}
       y={{ scale: 'log', label: 'Y' }}
       series={shown}
       marks={[]}
     />,
   )
+}
 const plane = (): HTMLElement => screen.getByRole('slider', { name: /Temperature cursor of Yield/ })
 const summaryOf = (container: HTMLElement): string => container.querySelector('p.sr-only')!.textContent
 
-beforeEach(() => layOut(800))
+beforeEach(() => {
+  layOut(800)
+  cursor = createCursor()
+})
 afterEach(() => {
   cleanup()
   vi.restoreAllMocks()
@@ -61,6 +66,15 @@ describe('a chart', () => {
     expect(screen.getByText('1 GeV', { selector: 'span' })).toBeTruthy()
     expect(screen.getByText('10', { selector: '.number' })).toBeTruthy()
     expect(screen.getByText('5', { selector: '.number' })).toBeTruthy()
+  })
+
+  it('follows a cursor that is moved elsewhere on the page, and clears when it leaves', () => {
+    draw()
+    expect(screen.queryByText('1 GeV', { selector: 'span' })).toBeNull()
+    act(() => cursor.move(1))
+    expect(screen.getByText('10', { selector: '.number' })).toBeTruthy()
+    act(() => cursor.move(null))
+    expect(screen.queryByText('10', { selector: '.number' })).toBeNull()
   })
 
   it('hides and shows a curve by its name', () => {
@@ -85,7 +99,7 @@ describe('a chart', () => {
   it('moves its cursor, zooms and resets by keyboard, leaving the browser its own keys', () => {
     draw(1)
     fireEvent.keyDown(plane(), { key: 'ArrowRight' })
-    expect(onCursor.mock.lastCall![0]).toBeLessThan(1)
+    expect(cursor.read()!).toBeLessThan(1)
     fireEvent.keyDown(plane(), { key: '+' })
     expect(onWindow.mock.lastCall![0]).toBeLessThan(100)
     fireEvent.keyDown(plane(), { key: '0' })

@@ -1,10 +1,11 @@
 import { cleanup, fireEvent, render, screen } from '@testing-library/react'
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
+import { createCursor } from '../../../../web/src/components/charts/cursor.ts'
 import { EmberLine } from '../../../../web/src/components/ember-line/EmberLine.tsx'
 import { layOut } from '../layOut.ts'
 
 const onWindow = vi.fn()
-const onCursor = vi.fn()
+const cursor = createCursor()
 
 const draw = (props: Partial<Parameters<typeof EmberLine>[0]> = {}) =>
   render(
@@ -12,8 +13,7 @@ const draw = (props: Partial<Parameters<typeof EmberLine>[0]> = {}) =>
       range={{ hotGeV: 1e4, coldGeV: 1e-4 }}
       window={{ hotGeV: 250, coldGeV: 2e-4 }}
       onWindow={onWindow}
-      cursorGeV={null}
-      onCursor={onCursor}
+      cursor={cursor}
       epochs={[
         { code: 'qcd-crossover', label: 'QCD crossover', temperatureGeV: 0.1565, importance: 9 },
         { code: 'maximum-temperature', label: 'maximum', temperatureGeV: 1e8, importance: 9 },

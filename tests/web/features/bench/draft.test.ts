@@ -85,3 +85,25 @@ describe('the address of the Bench', () => {
     expect(writeAddress({ history: null, candidate: null, draft: {}, window: null })).toBe('')
   })
 })
+
+describe('a draft in an address', () => {
+  const withHistory = (over: object) =>
+    decodeDraft(btoa(JSON.stringify({ history: { ...history, ...over } })))
+  const withCandidate = (over: object) =>
+    decodeDraft(btoa(JSON.stringify({ candidate: { ...candidate, ...over } })))
+
+  it('is taken only where the forms can show it', () => {
+    const plain = { extraSpecies: [] }
+    expect(withHistory(plain).history).toBeDefined()
+    for (const broken of [
+      { neutrinos: null },
+      { expansion: { kind: 'backwards' } },
+      { extraSpecies: [{ name: 'x' }] },
+      { today: 3 },
+    ])
+      expect(withHistory({ ...plain, ...broken })).toEqual({})
+    expect(withCandidate({}).candidate).toBeDefined()
+    for (const broken of [{ annihilation: { kind: 'unheard-of' } }, { mechanism: 'freeze-in-decay' }])
+      expect(withCandidate(broken)).toEqual({})
+  })
+})

@@ -62,6 +62,21 @@ describe('the list of histories', () => {
     expect(screen.queryByRole('alert')).toBeNull()
   })
 
+  it.each([
+    ['author', 1],
+    ['lead', 1],
+    ['reader', 0],
+  ] as const)('leads the %s to the Bench for a new one, if they may save one', async (role, links) => {
+    serve({
+      '/histories': page([historyRecordOf(100, 'Standard', aHistory())]),
+      '/session': { body: { ...sessionOf(uuid(101)), role } },
+    })
+    showHistories()
+    await screen.findByText('baseline')
+    const found = screen.queryAllByRole('link', { name: 'New history on the Bench' })
+    expect(found.map((link) => link.getAttribute('href'))).toEqual(Array<string>(links).fill('/bench'))
+  })
+
   it('points to the Bench while it is empty', async () => {
     serve({ '/histories': page([]) })
     showHistories()

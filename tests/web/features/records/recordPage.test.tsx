@@ -66,11 +66,27 @@ describe('the page of a history', () => {
     show()
     const changed = within(await region('What changed'))
     const paths = () => changed.getAllByRole('rowheader').map((cell) => cell.textContent)
-    expect(paths()).toEqual(['maximumTemperatureGeV'])
+    expect(paths()).toEqual(['Maximum temperature', 'maximumTemperatureGeV'])
     fireEvent.change(changed.getByRole('combobox', { name: 'From' }), { target: { value: '1' } })
     expect(paths()).toContain('expansion.equalityTemperatureGeV')
     fireEvent.change(changed.getByRole('combobox', { name: 'To' }), { target: { value: '1' } })
     expect(changed.getByText('These two are the same in every field.')).toBeDefined()
+  })
+
+  it('says in words what the fields that differ come to, and leaves out what is the same', async () => {
+    show()
+    const changed = within(await region('What changed'))
+    fireEvent.change(changed.getByRole('combobox', { name: 'From' }), { target: { value: '1' } })
+    fireEvent.change(changed.getByRole('combobox', { name: 'To' }), { target: { value: '2' } })
+    const words = changed.getByRole('rowheader', { name: 'Expansion' }).closest('tr')!
+    expect(
+      within(words)
+        .getAllByRole('cell')
+        .map((cell) => cell.textContent),
+    ).toEqual(['radiation', '→ kination, equal to radiation at 500 MeV'])
+    const absent = changed.getByRole('rowheader', { name: 'expansion.index' }).closest('tr')!
+    expect(absent.textContent).toContain('not part of it')
+    expect(changed.queryByRole('rowheader', { name: 'Bath' })).toBeNull()
   })
 
   it('lists the evaluations that use it', async () => {
@@ -88,9 +104,30 @@ describe('the page of a history', () => {
     expect(await revisions.findByText('copied')).toBeDefined()
     expect(writeText).toHaveBeenCalledWith('ab12'.repeat(16))
   })
+
+  it('shows the whole digest to be selected when the browser does not let it copy', async () => {
+    vi.stubGlobal('navigator', {})
+    show()
+    const revisions = within(await region('Revisions'))
+    fireEvent.click(revisions.getAllByRole('button', { name: /Copy the whole digest/ })[0]!)
+    expect(await revisions.findByText('ab12'.repeat(16))).toBeDefined()
+    expect(revisions.getByText(/select it instead/)).toBeDefined()
+  })
 })
 
 describe('the page of a candidate', () => {
+  it('says in a line what changed about the particle', async () => {
+    const heavier = aCandidate({ massGeV: 250 })
+    serve({
+      [`/candidates/${uuid(200)}`]: { body: candidateRecordOf(200, 'Thermal', aCandidate(), heavier) },
+    })
+    renderPage(CandidatePage, '/candidates/:id', `/candidates/${uuid(200)}`)
+    const changed = within(await region('What changed'))
+    const words = changed.getByRole('rowheader', { name: 'Particle' }).closest('tr')!
+    expect(words.textContent).toMatch(/100 GeV .*→ 250 GeV /)
+    expect(changed.getAllByRole('rowheader')[1]!.textContent).toBe('massGeV')
+  })
+
   it('tells its particle with units', async () => {
     serve({ [`/candidates/${uuid(200)}`]: { body: candidateRecordOf(200, 'Thermal', aCandidate()) } })
     renderPage(CandidatePage, '/candidates/:id', `/candidates/${uuid(200)}`)
@@ -103,5 +140,6 @@ describe('the page of a candidate', () => {
     serve({})
     renderPage(CandidatePage, '/candidates/:id', `/candidates/${uuid(200)}`)
     expect((await screen.findByRole('alert')).textContent).toContain('Not found')
+    expect(screen.queryByRole('button', { name: 'Try again' })).toBeNull()
   })
 })

@@ -1,6 +1,8 @@
 import type { Curve } from '#core/bench/types'
 import { temperatureText } from '../../lib/temperature.ts'
 import { Num } from '../ui/Num.tsx'
+import { useCursorAt } from './cursor.ts'
+import type { Cursor } from './cursor.ts'
 import { valueAtTemperature } from './curvePath.ts'
 import type { Series } from './series.ts'
 
@@ -8,11 +10,11 @@ interface LegendProps {
   series: readonly Series[]
   hidden: ReadonlySet<string>
   onToggle: (id: string) => void
-  cursorGeV: number | null
+  cursor: Cursor
 }
 
 /** Names with their dash, to show and hide; beside them the values at the cursor, in room kept for them. */
-export function Legend({ series, hidden, onToggle, cursorGeV }: LegendProps) {
+export function Legend({ series, hidden, onToggle, cursor }: LegendProps) {
   return (
     <div className="flex min-h-6 flex-wrap items-center gap-x-3 text-caption text-soft">
       {series.map((each) => {
@@ -36,19 +38,26 @@ export function Legend({ series, hidden, onToggle, cursorGeV }: LegendProps) {
               {each.name}
             </button>
             <span className="inline-block min-w-[6.2em] text-ink">
-              {cursorGeV !== null && shown ? <ValueAtCursor curve={each.curve} at={cursorGeV} /> : null}
+              {shown ? <ValueAtCursor curve={each.curve} cursor={cursor} /> : null}
             </span>
           </span>
         )
       })}
       <span className="ml-auto min-w-[5.5em] text-right whitespace-nowrap">
-        {cursorGeV === null ? null : temperatureText(Number(cursorGeV.toPrecision(3)))}
+        <CursorTemperature cursor={cursor} />
       </span>
     </div>
   )
 }
 
-function ValueAtCursor({ curve, at }: { curve: Curve; at: number }) {
+function CursorTemperature({ cursor }: { cursor: Cursor }) {
+  const at = useCursorAt(cursor)
+  return at === null ? null : <>{temperatureText(Number(at.toPrecision(3)))}</>
+}
+
+function ValueAtCursor({ curve, cursor }: { curve: Curve; cursor: Cursor }) {
+  const at = useCursorAt(cursor)
+  if (at === null) return null
   const value = valueAtTemperature(curve, at)
   return Number.isFinite(value) ? <Num value={value} digits={3} /> : <>–</>
 }

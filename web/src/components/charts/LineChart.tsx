@@ -1,6 +1,7 @@
 import { useId, useMemo, useRef, useState } from 'react'
 import type { Curve } from '#core/bench/types'
 import { ChartMenu } from './ChartMenu.tsx'
+import type { Cursor } from './cursor.ts'
 import { DataTable } from './DataTable.tsx'
 import { Legend } from './Legend.tsx'
 import { Panel } from './Panel.tsx'
@@ -18,9 +19,8 @@ export interface LineChartProps {
   window: TemperatureWindow
   onWindow: (hotGeV: number, coldGeV: number) => void
   onReset: () => void
-  cursorGeV: number | null
-  onCursor: (temperatureGeV: number | null) => void
-  y: { scale: 'log' | 'linear'; domain?: [number, number]; label: string }
+  cursor: Cursor
+  y: { scale: 'log' | 'linear'; domain?: [number, number]; label: string; reference?: number }
   series: readonly Series[]
   marks: readonly Mark[]
   /** A curve about one, drawn in a strip of its own beneath over the same temperatures. */
@@ -32,7 +32,9 @@ const LEFT = 46
 /** Room above the frame for the symbol of the values. */
 const TOP = 28
 const RIGHT = 108
-const RIGHT_NARROW = 12
+
+/** Room for half of the last temperature, px. */
+const RIGHT_NARROW = 26
 const RATIO_HEIGHT = 64
 const RATIO_GAP = 16
 const AXIS_HEIGHT = 26
@@ -42,7 +44,7 @@ const NARROW = 480
 
 /** Curves against temperature, hot at the left: window by dragging, cursor shared with every chart of the page. */
 export function LineChart(props: LineChartProps) {
-  const { title, description, height, window, series, ratio, cursorGeV } = props
+  const { title, description, height, window, series, ratio, cursor } = props
   const [frame, width] = useWidth<HTMLDivElement>()
   const svg = useRef<SVGSVGElement>(null)
   const [hidden, setHidden] = useState<ReadonlySet<string>>(new Set())
@@ -78,7 +80,7 @@ export function LineChart(props: LineChartProps) {
         series={series}
         hidden={hidden}
         onToggle={(one) => setHidden((before) => toggled(before, one))}
-        cursorGeV={cursorGeV}
+        cursor={cursor}
       />
       <div ref={frame}>
         {width === 0 ? (
@@ -98,19 +100,14 @@ export function LineChart(props: LineChartProps) {
               y={y}
               series={shown}
               marks={props.marks}
-              cursorGeV={cursorGeV}
+              cursor={cursor}
               labels={names}
               temperatureLabels={!ratio}
               symbol={props.y.label}
+              reference={props.y.reference}
             />
             {ratio ? (
-              <RatioPanel
-                ratio={ratio}
-                x={x}
-                cursorGeV={cursorGeV}
-                top={height - AXIS_HEIGHT}
-                bottom={total}
-              />
+              <RatioPanel ratio={ratio} x={x} cursor={cursor} top={height - AXIS_HEIGHT} bottom={total} />
             ) : null}
             <Plane {...props} x={x} top={TOP} bottom={total - AXIS_HEIGHT} />
           </svg>
@@ -133,12 +130,12 @@ function toggled(before: ReadonlySet<string>, one: string): ReadonlySet<string> 
 interface RatioPanelProps {
   ratio: NonNullable<LineChartProps['ratio']>
   x: AxisScale
-  cursorGeV: number | null
+  cursor: Cursor
   top: number
   bottom: number
 }
 
-function RatioPanel({ ratio: { label, curve, domain }, x, cursorGeV, top, bottom }: RatioPanelProps) {
+function RatioPanel({ ratio: { label, curve, domain }, x, cursor, top, bottom }: RatioPanelProps) {
   const series: Series = {
     id: 'ratio',
     name: label,
@@ -153,7 +150,7 @@ function RatioPanel({ ratio: { label, curve, domain }, x, cursorGeV, top, bottom
       y={{ kind: 'linear', domain, range: [bottom - AXIS_HEIGHT, top + RATIO_GAP] }}
       series={[series]}
       marks={[]}
-      cursorGeV={cursorGeV}
+      cursor={cursor}
       labels={false}
       temperatureLabels
       caption={label}

@@ -2,6 +2,8 @@ import { Axis, Grid } from '@visx/visx'
 import { useId, useMemo } from 'react'
 import { TemperatureTick, TickNumber, needsPowers } from './AxisLabels.tsx'
 import { EndLabels } from './EndLabels.tsx'
+import { useCursorAt } from './cursor.ts'
+import type { Cursor } from './cursor.ts'
 import type { Mark, Series } from './series.ts'
 import { pathData, stretches } from './curvePath.ts'
 import { inside, linearTicks, logTicks, position, visxScale } from './scale.ts'
@@ -12,7 +14,7 @@ interface PanelProps {
   y: AxisScale
   series: readonly Series[]
   marks: readonly Mark[]
-  cursorGeV: number | null
+  cursor: Cursor
   /** Whether names stand at the ends of the curves. */
   labels: boolean
   temperatureLabels: boolean
@@ -20,18 +22,17 @@ interface PanelProps {
   /** Symbol of what the values are. */
   symbol?: string
   /** A value with a line of its own, such as one. */
-  reference?: number
+  reference?: number | undefined
 }
 
-const PX_PER_TEMPERATURE_LABEL = 86
+const PX_PER_TEMPERATURE_LABEL = 70
 const PX_PER_VALUE_LABEL = 28
 const FEWEST_VALUES = 3
 
 /** One frame: grid, axes, curves with their names at their ends, marks and cursor. */
 export function Panel(props: PanelProps) {
-  const { x, y, cursorGeV } = props
+  const { x, y, cursor } = props
   const clip = useId()
-  const cursor = cursorGeV === null ? NaN : position(x, cursorGeV)
   return (
     <g>
       <clipPath id={clip}>
@@ -51,12 +52,17 @@ export function Panel(props: PanelProps) {
       {props.marks.map((mark) => (
         <MarkLine key={`${mark.label} ${mark.temperatureGeV}`} mark={mark} x={x} y={y} />
       ))}
-      {inside(cursor, x.range) ? (
-        <path d={`M${cursor} ${y.range[1]}V${y.range[0]}`} stroke="var(--soft)" shapeRendering="crispEdges" />
-      ) : null}
+      <CursorLine cursor={cursor} x={x} y={y} />
       {props.labels ? <EndLabels series={props.series} x={x} y={y} /> : null}
     </g>
   )
+}
+
+function CursorLine({ cursor, x, y }: { cursor: Cursor; x: AxisScale; y: AxisScale }) {
+  const temperatureGeV = useCursorAt(cursor)
+  const at = temperatureGeV === null ? NaN : position(x, temperatureGeV)
+  if (!inside(at, x.range)) return null
+  return <path d={`M${at} ${y.range[1]}V${y.range[0]}`} stroke="var(--soft)" shapeRendering="crispEdges" />
 }
 
 const valueTick = (powers: boolean) =>

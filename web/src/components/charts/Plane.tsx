@@ -4,6 +4,8 @@ import { temperatureText } from '../../lib/temperature.ts'
 import { cursorOrMiddle, keyAction } from './chartKeys.ts'
 import { position, valueAt } from './scale.ts'
 import type { AxisScale } from './scale.ts'
+import { useCursorAt } from './cursor.ts'
+import type { Cursor } from './cursor.ts'
 import { between } from './window.ts'
 import type { TemperatureWindow } from './window.ts'
 
@@ -12,15 +14,15 @@ interface PlaneProps {
   window: TemperatureWindow
   onWindow: (hotGeV: number, coldGeV: number) => void
   onReset: () => void
-  cursorGeV: number | null
-  onCursor: (temperatureGeV: number | null) => void
+  cursor: Cursor
   x: AxisScale
   top: number
   bottom: number
 }
 
 /** The surface over a chart that takes pointer and keys: a slider of the cursor, for those who cannot see it. */
-export function Plane({ title, window, onWindow, onReset, cursorGeV, onCursor, x, top, bottom }: PlaneProps) {
+export function Plane({ title, window, onWindow, onReset, cursor, x, top, bottom }: PlaneProps) {
+  const cursorGeV = useCursorAt(cursor)
   const [drag, setDrag] = useState<{ from: number; to: number } | null>(null)
   const temperatureOf = (event: PointerEvent<SVGElement>): number => {
     const box = event.currentTarget.getBoundingClientRect()
@@ -34,7 +36,7 @@ export function Plane({ title, window, onWindow, onReset, cursorGeV, onCursor, x
   }
   const move = (event: PointerEvent<SVGElement>): void => {
     const at = temperatureOf(event)
-    onCursor(at)
+    cursor.move(at)
     if (drag) setDrag({ ...drag, to: at })
   }
   const release = (): void => {
@@ -47,7 +49,7 @@ export function Plane({ title, window, onWindow, onReset, cursorGeV, onCursor, x
     const action = keyAction(event.key, window, cursorGeV)
     if (!action) return
     event.preventDefault()
-    if (action.kind === 'cursor') onCursor(action.cursorGeV)
+    if (action.kind === 'cursor') cursor.move(action.cursorGeV)
     else if (action.kind === 'reset') onReset()
     else onWindow(action.window.hotGeV, action.window.coldGeV)
   }
@@ -68,12 +70,12 @@ export function Plane({ title, window, onWindow, onReset, cursorGeV, onCursor, x
         aria-valuemax={Math.log10(window.hotGeV)}
         aria-valuenow={Math.log10(here)}
         aria-valuetext={temperatureText(Number(here.toPrecision(3)))}
-        className="cursor-crosshair touch-pan-y"
+        className="cursor-crosshair touch-pan-y [&:focus:not(:focus-visible)]:outline-none"
         onPointerDown={press}
         onPointerMove={move}
         onPointerUp={release}
         onPointerCancel={() => setDrag(null)}
-        onPointerLeave={() => onCursor(null)}
+        onPointerLeave={() => cursor.move(null)}
         onDoubleClick={onReset}
         onKeyDown={onKey}
       />

@@ -1,7 +1,9 @@
 import { useRef, useState } from 'react'
 import type { PointerEvent } from 'react'
 import type { BenchReport, EpochMark } from '#core/bench/types'
-import { position, valueAt } from '../charts/scale.ts'
+import { useCursorAt } from '../charts/cursor.ts'
+import type { Cursor } from '../charts/cursor.ts'
+import { inside, position, valueAt } from '../charts/scale.ts'
 import type { AxisScale } from '../charts/scale.ts'
 import { useWidth } from '../charts/useWidth.ts'
 import { shifted, withEnd } from '../charts/window.ts'
@@ -15,8 +17,7 @@ export interface EmberLineProps {
   range: TemperatureWindow
   window: TemperatureWindow
   onWindow: (hotGeV: number, coldGeV: number) => void
-  cursorGeV: number | null
-  onCursor: (temperatureGeV: number | null) => void
+  cursor: Cursor
   epochs: readonly EpochMark[]
   times: BenchReport['times']
   mark: BenchReport['mark']
@@ -35,7 +36,7 @@ type Grip = { part: 'hot' | 'cold' } | { part: 'both'; fromGeV: number; window: 
 
 /** The temperature ruler of the page: hot at the left, time beneath, epochs above, and the window of every chart. */
 export function EmberLine(props: EmberLineProps) {
-  const { window, cursorGeV, onCursor } = props
+  const { window, cursor } = props
   const [frame, width] = useWidth<HTMLDivElement>()
   const svg = useRef<SVGSVGElement>(null)
   const [grip, setGrip] = useState<Grip | null>(null)
@@ -64,7 +65,7 @@ export function EmberLine(props: EmberLineProps) {
   }
   const move = (event: PointerEvent): void => {
     const here = temperatureOf(event)
-    onCursor(here)
+    cursor.move(here)
     if (!grip) return
     if (grip.part === 'both') change(shifted(grip.window, here / grip.fromGeV, span))
     else change(withEnd(window, grip.part, here, span))
@@ -79,13 +80,13 @@ export function EmberLine(props: EmberLineProps) {
         ref={svg}
         width={width}
         height={height}
-        className="block touch-none text-[12px] select-none"
+        className="block touch-pan-y text-[12px] select-none"
         role="group"
         aria-label="Temperature of the bath, hot to cold"
         onPointerMove={move}
         onPointerUp={release}
         onPointerCancel={release}
-        onPointerLeave={() => onCursor(null)}
+        onPointerLeave={() => cursor.move(null)}
       >
         <rect
           x={at(window.hotGeV)}
@@ -99,9 +100,7 @@ export function EmberLine(props: EmberLineProps) {
           onPointerDown={(event) => take(event, 'both')}
         />
         <Ruler {...props} x={x} width={width} line={LINE} compact={compact} span={span} />
-        {cursorGeV === null || cursorGeV > span.hotGeV || cursorGeV < span.coldGeV ? null : (
-          <path d={`M${at(cursorGeV)} 6V${height - 7}`} stroke="var(--soft)" pointerEvents="none" />
-        )}
+        <CursorLine cursor={cursor} x={x} height={height} />
         {(['hot', 'cold'] as const).map((end) => {
           const temperatureGeV = end === 'hot' ? window.hotGeV : window.coldGeV
           return (
@@ -121,4 +120,11 @@ export function EmberLine(props: EmberLineProps) {
       </svg>
     </div>
   )
+}
+
+function CursorLine({ cursor, x, height }: { cursor: Cursor; x: AxisScale; height: number }) {
+  const temperatureGeV = useCursorAt(cursor)
+  const at = temperatureGeV === null ? NaN : position(x, temperatureGeV)
+  if (!inside(at, x.range)) return null
+  return <path d={`M${at} 6V${height - 7}`} stroke="var(--soft)" pointerEvents="none" />
 }

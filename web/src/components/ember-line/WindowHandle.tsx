@@ -59,7 +59,7 @@ export function WindowHandle({
       aria-valuemax={Math.log10(span.hotGeV)}
       aria-valuenow={Math.log10(temperatureGeV)}
       aria-valuetext={temperatureText(Number(temperatureGeV.toPrecision(3)))}
-      className="cursor-ew-resize"
+      className="cursor-ew-resize [&:focus:not(:focus-visible)]:outline-none"
       onPointerDown={onTake}
       onKeyDown={onKeyDown}
     >

@@ -7,7 +7,8 @@ interface ButtonProps extends ButtonHTMLAttributes<HTMLButtonElement> {
   children: ReactNode
 }
 
-const LOOK = {
+/** How what is pressed looks, for links that stand as buttons too. */
+export const BUTTON_LOOK = {
   primary:
     'rounded-[5px] bg-ink px-3.5 py-1.5 font-semibold text-on-ink hover:opacity-90 disabled:opacity-50',
   quiet:
@@ -29,7 +30,7 @@ export function Button({
       {...rest}
       disabled={disabled || busy}
       aria-busy={busy}
-      className={`${LOOK[variant]} ${className}`}
+      className={`${BUTTON_LOOK[variant]} ${className}`}
     >
       {children}
       {busy ? <span aria-hidden="true"> …</span> : null}

@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react'
-import { ApiProblem } from '../../lib/apiProblem.ts'
+import { ApiProblem, saysSignedOut } from '../../lib/apiProblem.ts'
 
 /** What went wrong, what was kept, what to do. */
 export function ErrorNotice({ error, children }: { error: Error; children?: ReactNode }) {
@@ -13,7 +13,15 @@ export function ErrorNotice({ error, children }: { error: Error; children?: Reac
           <code className="font-mono">{fault.path === '' ? 'input' : fault.path}</code>: {fault.message}
         </p>
       ))}
-      {problem?.requestId === undefined ? null : (
+      {saysSignedOut(error) ? (
+        <p>
+          <a href="/sign-in" target="_blank" rel="noreferrer" className="link">
+            Sign in in another tab
+          </a>
+          , then go on here.
+        </p>
+      ) : null}
+      {problem?.requestId === undefined || problem.status < 500 ? null : (
         <p className="text-caption text-soft">Request {problem.requestId}</p>
       )}
       {children}

@@ -1,4 +1,5 @@
 import { numberParts, plainText } from '../../lib/number.ts'
+import { useCopy } from './useCopy.ts'
 
 interface NumProps {
   value: number
@@ -23,16 +24,27 @@ export function Num({ value, digits = 4, unit }: NumProps) {
   )
 }
 
-/** The same, copied at full precision when pressed. */
+/** The same, copied at full precision when pressed; above it stands what became of that. */
 export function CopyNum(props: NumProps) {
+  const [state, copy] = useCopy()
+  const text = plainText(props.value)
   return (
-    <button
-      type="button"
-      className="hover:text-ember"
-      aria-label={`Copy ${plainText(props.value)}`}
-      onClick={() => void navigator.clipboard.writeText(plainText(props.value))}
-    >
-      <Num {...props} />
-    </button>
+    <span className="relative">
+      <button
+        type="button"
+        className="hover:text-ember"
+        aria-label={`Copy ${text}`}
+        onClick={() => void copy(text)}
+      >
+        <Num {...props} />
+      </button>
+      <span
+        role="status"
+        className="absolute bottom-[84%] left-0 font-sans text-caption leading-normal whitespace-nowrap text-soft"
+      >
+        {state === 'copied' ? 'copied' : ''}
+        {state === 'refused' ? `select to copy: ${text}` : ''}
+      </span>
+    </span>
   )
 }

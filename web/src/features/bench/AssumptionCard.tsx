@@ -3,6 +3,8 @@ import type { AssumptionFactor } from '#core/bench/types'
 import type { AssumptionGroup, HistoryInput } from '#core/wire/index'
 import { Button } from '../../components/ui/Button.tsx'
 import { ASSUMPTION_TITLES, describeAssumption } from '../../lib/describe.tsx'
+import { equal } from './equal.ts'
+import { RULED } from './forms/ruled.ts'
 import { AssumptionForm } from './forms/HistoryForms.tsx'
 
 interface CardProps {
@@ -17,7 +19,7 @@ interface CardProps {
 
 /** One group of assumptions as a ruled line: its choice, its own effect on the abundance, and its form when open. */
 export function AssumptionCard({ group, history, baseline, factor, open, onToggle, onChange }: CardProps) {
-  const differs = JSON.stringify(history[group]) !== JSON.stringify(baseline[group])
+  const differs = !equal(history[group], baseline[group])
   return (
     <li>
       <h3 className="font-sans">
@@ -38,7 +40,7 @@ export function AssumptionCard({ group, history, baseline, factor, open, onToggl
         </button>
       </h3>
       {open ? (
-        <div className="border-l-2 border-rule pb-3 pl-3">
+        <div className={`border-l-2 border-rule pb-3 pl-3 ${RULED}`}>
           <AssumptionForm group={group} history={history} onChange={onChange} />
           {differs ? (
             <Button variant="link" onClick={() => onChange({ ...history, [group]: baseline[group] })}>

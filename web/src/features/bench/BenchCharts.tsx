@@ -1,15 +1,15 @@
 import { memo, useMemo } from 'react'
 import type { BenchReport } from '#core/bench/types'
+import type { Cursor } from '../../components/charts/cursor.ts'
 import { LineChart } from '../../components/charts/LineChart.tsx'
 import { GRho, GS } from '../../components/ui/symbols.tsx'
-import type { TemperatureWindow } from './draft.ts'
+import type { TemperatureWindow } from '../../components/charts/window.ts'
 
 interface BenchChartsProps {
   report: BenchReport
   window: TemperatureWindow
   onWindow: (window: TemperatureWindow | null) => void
-  cursorGeV: number | null
-  onCursor: (temperatureGeV: number | null) => void
+  cursor: Cursor
   /** Whether history and baseline differ at all. */
   differs: boolean
 }
@@ -35,8 +35,7 @@ export const BenchCharts = memo(function BenchCharts({
   report,
   window,
   onWindow,
-  cursorGeV,
-  onCursor,
+  cursor,
   differs,
 }: BenchChartsProps) {
   const marks = useMemo(
@@ -123,8 +122,7 @@ export const BenchCharts = memo(function BenchCharts({
     window,
     onWindow: (hotGeV: number, coldGeV: number) => onWindow({ hotGeV, coldGeV }),
     onReset: () => onWindow(null),
-    cursorGeV,
-    onCursor,
+    cursor,
     marks,
   }
   return (
@@ -159,7 +157,7 @@ export const BenchCharts = memo(function BenchCharts({
         title={RATE_TITLES[report.mark?.kind ?? 'production']}
         description="Rate over the Hubble rate against the temperature of the bath; at one they are equal"
         height={170}
-        y={{ scale: 'log', label: 'Γ/H', domain: rateDomain(report) }}
+        y={{ scale: 'log', label: 'Γ/H', reference: 1, domain: rateDomain(report) }}
         series={rate}
       />
     </div>
@@ -177,5 +175,5 @@ function ratioDomain({ gRhoRatioCurve }: BenchReport): [number, number] {
 
 function rateDomain({ rateOverHubbleCurve }: BenchReport): [number, number] {
   const top = Math.max(...[...rateOverHubbleCurve.value].filter((value) => Number.isFinite(value)), 1)
-  return [1e-4, 10 ** Math.min(12, Math.ceil(Math.log10(top)))]
+  return [1e-4, 10 ** Math.ceil(Math.log10(top))]
 }

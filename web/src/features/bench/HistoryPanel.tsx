@@ -1,12 +1,12 @@
 import { useQuery } from '@tanstack/react-query'
 import { useState } from 'react'
-import { Link } from 'react-router-dom'
 import type { AssumptionFactor } from '#core/bench/types'
 import type { AssumptionGroup, HistoryInput, HistoryRevision } from '#core/wire/index'
 import { historiesQuery } from '../../api/records.ts'
 import { ASSUMPTION_ORDER } from '../../lib/describe.tsx'
 import { AssumptionCard } from './AssumptionCard.tsx'
-import { RecordPicker } from './RecordPicker.tsx'
+import { equal } from './equal.ts'
+import { RecordPicker, RevisionWords } from './RecordPicker.tsx'
 import type { Chosen } from './revisions.ts'
 
 interface HistoryPanelProps {
@@ -16,6 +16,7 @@ interface HistoryPanelProps {
   baseline: HistoryInput
   baselineName: string | null
   factors: readonly AssumptionFactor[]
+  onPick: (recordId: string, number: number) => void
   onChange: (history: HistoryInput) => void
 }
 
@@ -27,23 +28,20 @@ export function HistoryPanel({
   baseline,
   baselineName,
   factors,
+  onPick,
   onChange,
 }: HistoryPanelProps) {
   const [open, setOpen] = useState<AssumptionGroup | null>(null)
   const { data: histories = [] } = useQuery(historiesQuery)
-  const differing = ASSUMPTION_ORDER.filter(
-    (group) => JSON.stringify(history[group]) !== JSON.stringify(baseline[group]),
-  ).length
+  const differing = ASSUMPTION_ORDER.filter((group) => !equal(history[group], baseline[group])).length
   return (
     <section aria-labelledby="history-title">
       <h2 id="history-title" className="sr-only">
         History
       </h2>
-      <RecordPicker kind="history" chosen={chosen} changed={changed} records={histories} />
+      <RecordPicker kind="history" chosen={chosen} records={histories} onPick={onPick} />
       <p className="pb-3 text-small text-soft">
-        <Link className="hover:text-ember" to={`/histories/${chosen.recordId}`}>
-          revision {chosen.revision.number}
-        </Link>
+        <RevisionWords kind="history" chosen={chosen} changed={changed} />
         {baselineName === null
           ? ' · the group has adopted no baseline'
           : differing === 0
@@ -53,7 +51,7 @@ export function HistoryPanel({
       <ul className="rows border-y border-rule">
         {ASSUMPTION_ORDER.map((group) => (
           <AssumptionCard
-            key={group}
+            key={`${chosen.revision.id} ${group}`}
             group={group}
             history={history}
             baseline={baseline}

@@ -1,19 +1,24 @@
 import type { BenchView } from './useBenchAnswer.ts'
 
-/** What the core found wrong, and that the numbers shown are those from before. */
+/** What went wrong with the present input, and that the numbers shown are those from before. */
 export function Problems({ view }: { view: BenchView }) {
-  if (view.failure !== null)
+  const { failure, faults } = view
+  const shown = view.report === null ? '' : ' What is shown below is the last that could be computed.'
+  if (failure)
     return (
       <p role="alert" className="border-l-2 border-fault pl-3">
-        No converged number: {view.failure}. What is shown below is the last one that was reached.
+        {failure.of === 'convergence'
+          ? `No converged number: ${failure.reason}.`
+          : `The part of Emberline that computes has stopped: ${failure.reason}. The next change starts it again; reload the page if it does not.`}
+        {shown}
       </p>
     )
-  if (view.faults.length === 0) return null
+  if (faults.length === 0) return null
   return (
     <div role="alert" className="border-l-2 border-fault pl-3">
-      <p>This input cannot be computed; what is shown below is the last that could.</p>
+      <p>This input cannot be computed.{shown}</p>
       <ul>
-        {view.faults.map((fault) => (
+        {faults.map((fault) => (
           <li key={fault.path + fault.message} className="text-small text-fault">
             <code className="font-mono">{fault.path}</code>: {fault.message}
           </li>

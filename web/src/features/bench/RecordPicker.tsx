@@ -1,30 +1,23 @@
 import { useId } from 'react'
-import { useNavigate } from 'react-router-dom'
-import { readAddress, writeAddress } from './draft.ts'
+import { Link } from 'react-router-dom'
+import type { Chosen } from './revisions.ts'
 
 interface RecordPickerProps {
   kind: 'history' | 'candidate'
-  chosen: { recordId: string; name: string; revision: { number: number } }
-  changed: boolean
+  chosen: Pick<Chosen<unknown>, 'recordId' | 'name'>
   records: readonly { id: string; name: string; head: { number: number } }[]
+  onPick: (recordId: string, number: number) => void
 }
 
 /** The name of the record on the Bench; picking another keeps the rest of the Bench and drops this record's changes. */
-export function RecordPicker({ kind, chosen, changed, records }: RecordPickerProps) {
+export function RecordPicker({ kind, chosen, records, onPick }: RecordPickerProps) {
   const id = useId()
-  const navigate = useNavigate()
   const pick = (recordId: string): void => {
     const record = records.find((each) => each.id === recordId)
-    if (!record) return
-    const address = readAddress(location.search)
-    const draft = { ...address.draft }
-    delete draft[kind]
-    void navigate(
-      `/bench${writeAddress({ ...address, draft, [kind]: { recordId, number: record.head.number } })}`,
-    )
+    if (record) onPick(recordId, record.head.number)
   }
   return (
-    <div className="flex items-baseline gap-2">
+    <>
       <label htmlFor={id} className="sr-only">
         {kind === 'history' ? 'History on the Bench' : 'Candidate on the Bench'}
       </label>
@@ -40,7 +33,27 @@ export function RecordPicker({ kind, chosen, changed, records }: RecordPickerPro
           </option>
         ))}
       </select>
-      {changed ? <span className="shrink-0 text-small text-ember">changed, not saved</span> : null}
-    </div>
+    </>
+  )
+}
+
+interface RevisionWordsProps {
+  kind: 'history' | 'candidate'
+  chosen: Chosen<{ number: number }>
+  changed: boolean
+}
+
+/** Which revision the Bench stands on, whether it is the newest, and whether the Bench has left it. */
+export function RevisionWords({ kind, chosen, changed }: RevisionWordsProps) {
+  const { number } = chosen.revision
+  const page = kind === 'history' ? 'histories' : 'candidates'
+  return (
+    <>
+      <Link className="hover:text-ember" to={`/${page}/${chosen.recordId}`}>
+        revision {number}
+        {number === chosen.newest.number ? '' : ` of ${chosen.newest.number}`}
+      </Link>
+      {changed ? <span className="text-ember"> · changed, not saved</span> : null}
+    </>
   )
 }

@@ -5,66 +5,19 @@ import { toast } from 'sonner'
 import { Button } from '../../components/ui/Button.tsx'
 import { Dialog } from '../../components/ui/Dialog.tsx'
 import { Field } from '../../components/ui/Field.tsx'
-import { ErrorNotice } from '../../components/ui/Notice.tsx'
-import { ApiProblem } from '../../lib/apiProblem.ts'
-import { readAddress, writeAddress } from './draft.ts'
+import { SaveAsChoice } from './SaveAsChoice.tsx'
+import { SaveTrouble } from './SaveTrouble.tsx'
+import { writeAddress } from './draft.ts'
+import type { BenchAddress } from './draft.ts'
+import type { DraftState, Opened } from './useDraft.ts'
 import { useSave } from './useSave.ts'
-import type { SaveAs, SaveRequest, Saved } from './useSave.ts'
+import type { Kept, SaveAs, Saved } from './useSave.ts'
 
-type Part = SaveRequest['history'] | SaveRequest['candidate']
-
-function SaveAsChoice({
-  what,
-  part,
-  value,
-  onChange,
-}: {
-  what: string
-  part: Part
-  value: SaveAs
-  onChange: (value: SaveAs) => void
-}) {
-  if (!part.changed) return null
-  const { name, newest } = part.chosen
-  return (
-    <fieldset className="grid gap-1 border-t border-rule pt-2">
-      <legend className="text-small font-semibold">{what}</legend>
-      <label className="flex gap-2">
-        <input
-          type="radio"
-          name={what}
-          checked={value.as === 'revision'}
-          onChange={() => onChange({ as: 'revision' })}
-          className="accent-[var(--ember)]"
-        />
-        Revision {newest + 1} of “{name}”
-      </label>
-      <label className="flex gap-2">
-        <input
-          type="radio"
-          name={what}
-          checked={value.as === 'new'}
-          onChange={() => onChange({ as: 'new', name: `${name}, changed` })}
-          className="accent-[var(--ember)]"
-        />
-        A record of its own
-      </label>
-      {value.as === 'new' ? (
-        <Field label={`Name of the new ${what.toLowerCase()}`}>
-          {(control) => (
-            <input
-              {...control}
-              className="input"
-              required
-              maxLength={120}
-              value={value.name}
-              onChange={(event) => onChange({ as: 'new', name: event.target.value })}
-            />
-          )}
-        </Field>
-      ) : null}
-    </fieldset>
-  )
+interface SaveDialogProps {
+  opened: Opened
+  draft: DraftState
+  shownOmegaH2: number
+  onClose: () => void
 }
 
 /** Says what was stored, and whether the server found the number that was shown. */
@@ -86,44 +39,68 @@ function announce({ evaluation, shown }: Saved): void {
   )
 }
 
+/** The address once these revisions are kept: what was kept is no change any more. */
+function addressAfter(address: BenchAddress, kept: Kept): BenchAddress {
+  const draft = { ...address.draft }
+  if (kept.history) delete draft.history
+  if (kept.candidate) delete draft.candidate
+  return {
+    ...address,
+    draft,
+    history: kept.history ?? address.history,
+    candidate: kept.candidate ?? address.candidate,
+  }
+}
+
 /** Keeps what is on the Bench under a note. */
-export default function SaveDialog({
-  request,
-  onClose,
-}: {
-  request: Omit<SaveRequest, 'note'>
-  onClose: () => void
-}) {
+export default function SaveDialog({ opened, draft, shownOmegaH2, onClose }: SaveDialogProps) {
+  const { history: chosenHistory, candidate: chosenCandidate } = opened
   const [note, setNote] = useState('')
-  const [history, setHistory] = useState<SaveAs>({ as: 'revision' })
-  const [candidate, setCandidate] = useState<SaveAs>({ as: 'revision' })
+  const [history, setHistory] = useState<SaveAs>({ as: 'revision', parentId: chosenHistory.newest.id })
+  const [candidate, setCandidate] = useState<SaveAs>({ as: 'revision', parentId: chosenCandidate.newest.id })
   const save = useSave()
   const navigate = useNavigate()
-  const revises = request.history.changed || request.candidate.changed
+  const { historyChanged, candidateChanged } = draft
+  const revises = historyChanged || candidateChanged
 
-  const submit = (event: FormEvent): void => {
-    event.preventDefault()
+  const show = (kept: Kept): void =>
+    void navigate(`/bench${writeAddress(addressAfter(draft.address, kept))}`, { replace: true })
+  const submit = (asHistory: SaveAs, asCandidate: SaveAs): void =>
     save.mutate(
       {
-        ...request,
         note,
-        history: { ...request.history, save: history },
-        candidate: { ...request.candidate, save: candidate },
+        history: { chosen: chosenHistory, input: draft.history, changed: historyChanged, save: asHistory },
+        candidate: {
+          chosen: chosenCandidate,
+          input: draft.candidate,
+          changed: candidateChanged,
+          save: asCandidate,
+        },
+        shownOmegaH2,
+        kept: save.error?.kept ?? {},
       },
       {
         onSuccess: (saved) => {
           announce(saved)
           onClose()
-          const { window } = readAddress(location.search)
-          void navigate(
-            `/bench${writeAddress({ history: saved.history, candidate: saved.candidate, draft: {}, window })}`,
-            { replace: true },
-          )
+          show({ history: saved.history, candidate: saved.candidate })
+        },
+        // A revision that was stored before the trouble stands on the Bench, so that it is not stored again.
+        onError: ({ kept }) => {
+          if (kept.history ?? kept.candidate) show(kept)
         },
       },
     )
+  const saveOnTop = (kind: 'history' | 'candidate', parentId: string): void => {
+    const onTop: SaveAs = { as: 'revision', parentId }
+    if (kind === 'history') setHistory(onTop)
+    else setCandidate(onTop)
+    submit(kind === 'history' ? onTop : history, kind === 'candidate' ? onTop : candidate)
   }
-  const stale = save.error instanceof ApiProblem && save.error.status === 409
+  const onSubmit = (event: FormEvent): void => {
+    event.preventDefault()
+    submit(history, candidate)
+  }
   return (
     <Dialog
       open
@@ -133,9 +110,13 @@ export default function SaveDialog({
       title={revises ? 'Save revision' : 'Save evaluation'}
       description="The server computes the number again and stores it with its inputs and the version of the core."
     >
-      <form onSubmit={submit} className="grid gap-3">
-        <SaveAsChoice what="History" part={request.history} value={history} onChange={setHistory} />
-        <SaveAsChoice what="Candidate" part={request.candidate} value={candidate} onChange={setCandidate} />
+      <form onSubmit={onSubmit} className="grid gap-3">
+        {historyChanged ? (
+          <SaveAsChoice what="History" chosen={chosenHistory} value={history} onChange={setHistory} />
+        ) : null}
+        {candidateChanged ? (
+          <SaveAsChoice what="Candidate" chosen={chosenCandidate} value={candidate} onChange={setCandidate} />
+        ) : null}
         {revises ? (
           <Field label="Note" hint="Why: what the group will want to know in a year.">
             {(control) => (
@@ -149,15 +130,7 @@ export default function SaveDialog({
             )}
           </Field>
         ) : null}
-        {save.error ? (
-          <ErrorNotice error={save.error}>
-            <p className="pt-1 text-small">
-              {stale
-                ? 'Your changes stand on the Bench. Save them as a record of their own, or open the newest revision and make them there.'
-                : 'Your changes stand on the Bench; try again.'}
-            </p>
-          </ErrorNotice>
-        ) : null}
+        {save.error ? <SaveTrouble stopped={save.error} opened={opened} onSaveOnTop={saveOnTop} /> : null}
         <div className="flex justify-end gap-2">
           <Button onClick={onClose}>Cancel</Button>
           <Button variant="primary" type="submit" busy={save.isPending}>

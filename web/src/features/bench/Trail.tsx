@@ -1,47 +1,41 @@
-import { useEffect, useState } from 'react'
+import type { ReactNode } from 'react'
 import { Num } from '../../components/ui/Num.tsx'
-import { ASSUMPTION_TITLES, ASSUMPTION_ORDER } from '../../lib/describe.tsx'
-import type { BenchView } from './useBenchAnswer.ts'
-import type { BenchInputs } from './useDraft.ts'
+import {
+  ASSUMPTION_ORDER,
+  ASSUMPTION_TITLES,
+  describeAssumption,
+  describeCandidate,
+} from '../../lib/describe.tsx'
+import { equal } from './equal.ts'
+import type { TrailStep } from './trail.ts'
 
-/** One thing tried in this sitting. */
-interface TrailStep extends BenchInputs {
-  words: string
-  omegaH2: number
-}
-
-const SETTLED_MS = 1200
-const MOST_STEPS = 8
-
-/** What changed from one look to the next, in a few words. */
-function wordsFor(before: TrailStep | undefined, now: BenchInputs): string {
-  if (!before) return 'as it was opened'
-  const groups = ASSUMPTION_ORDER.filter(
-    (group) => JSON.stringify(before.history[group]) !== JSON.stringify(now.history[group]),
-  ).map((group) => ASSUMPTION_TITLES[group].toLowerCase())
-  if (JSON.stringify(before.candidate) !== JSON.stringify(now.candidate)) groups.push('candidate')
-  return groups.length === 0 ? 'the same again' : groups.join(', ')
-}
-
-function followed(steps: readonly TrailStep[], view: BenchView): readonly TrailStep[] {
-  if (!view.report || !view.request || view.faults.length > 0) return steps
-  const { history, candidate } = view.request
-  const last = steps[0]
-  if (last && JSON.stringify([last.history, last.candidate]) === JSON.stringify([history, candidate]))
-    return steps
-  return [
-    { history, candidate, words: wordsFor(last, view.request), omegaH2: view.report.result.omegaH2 },
-    ...steps,
-  ].slice(0, MOST_STEPS)
+/** What was tried, told by what changed from the step before it. */
+function wordsFor(before: TrailStep | undefined, now: TrailStep): ReactNode {
+  if (before?.names.history !== now.names.history) return now.names.history
+  if (before.names.candidate !== now.names.candidate) return now.names.candidate
+  const groups = ASSUMPTION_ORDER.filter((group) => !equal(before.history[group], now.history[group]))
+  const [first] = groups
+  const sameCandidate = equal(before.candidate, now.candidate)
+  if (!first) return sameCandidate ? 'the same again' : describeCandidate(now.candidate)
+  if (groups.length === 1 && sameCandidate)
+    return (
+      <>
+        {ASSUMPTION_TITLES[first]}: {describeAssumption(first, now.history)}
+      </>
+    )
+  return [...groups.map((group) => ASSUMPTION_TITLES[group]), ...(sameCandidate ? [] : ['Candidate'])].join(
+    ', ',
+  )
 }
 
 /** The steps tried in this sitting, newest first; any of them can be returned to. */
-export function Trail({ view, onReturn }: { view: BenchView; onReturn: (inputs: BenchInputs) => void }) {
-  const [steps, setSteps] = useState<readonly TrailStep[]>([])
-  useEffect(() => {
-    const timer = setTimeout(() => setSteps((before) => followed(before, view)), SETTLED_MS)
-    return () => clearTimeout(timer)
-  }, [view])
+export function Trail({
+  steps,
+  onReturn,
+}: {
+  steps: readonly TrailStep[]
+  onReturn: (step: TrailStep) => void
+}) {
   if (steps.length < 2) return null
   return (
     <section aria-labelledby="trail-title">
@@ -53,10 +47,10 @@ export function Trail({ view, onReturn }: { view: BenchView; onReturn: (inputs: 
           <li key={steps.length - index}>
             <button
               type="button"
-              className="flex w-full justify-between gap-3 py-2 text-left hover:text-ember"
+              className="flex w-full items-baseline justify-between gap-3 py-2 text-left hover:text-ember"
               onClick={() => onReturn(step)}
             >
-              <span className="text-soft">{step.words}</span>
+              <span className="text-soft">{wordsFor(steps[index + 1], step)}</span>
               <Num value={step.omegaH2} />
             </button>
           </li>

@@ -91,7 +91,7 @@ export function Facts({ report }: { report: BenchReport }) {
     },
   ]
   return (
-    <dl className="rows border-y border-rule text-small">
+    <dl className="rows self-start border-y border-rule text-small">
       {facts.map((fact, index) =>
         fact.value === undefined ? null : (
           <div key={index} className="flex justify-between gap-3 py-2">

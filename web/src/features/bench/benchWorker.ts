@@ -10,6 +10,9 @@ export interface WorkerPort {
   terminate(): void
 }
 
+/** What came of a question: an answer, or a worker that broke down over it. */
+export type BenchOutcome = BenchAnswer | { status: 'broken'; reason: string }
+
 export interface BenchClient {
   ask(request: BenchRequest): void
   close(): void
@@ -18,16 +21,41 @@ export interface BenchClient {
 export const startWorker = (): WorkerPort =>
   new Worker(new URL('../../workers/bench.worker.ts', import.meta.url), { type: 'module' })
 
+/** A worker that could not be loaded gives no message. */
+const reasonOf = ({ message }: ErrorEvent): string =>
+  message ? message : 'it could not be loaded; the connection may be lost, or Emberline was updated'
+
 export function benchClient(
-  port: WorkerPort,
-  onAnswer: (answer: BenchAnswer, request: BenchRequest) => void,
+  start: () => WorkerPort,
+  onOutcome: (outcome: BenchOutcome, request: BenchRequest) => void,
 ): BenchClient {
+  let port: WorkerPort | null = null
   let lastId = 0
   let underWay: BenchQuestion | null = null
   let waiting: BenchRequest | null = null
 
+  const open = (): WorkerPort => {
+    const opened = start()
+    opened.onmessage = ({ data }) => {
+      if (data.id === underWay?.id) settle(data.answer)
+    }
+    opened.onerror = (event) => {
+      // It will answer nothing any more, not even what waits: the next question starts another.
+      close()
+      const asked = waiting ?? underWay?.request
+      underWay = null
+      waiting = null
+      if (asked) onOutcome({ status: 'broken', reason: reasonOf(event) }, asked)
+    }
+    return opened
+  }
+  const close = (): void => {
+    port?.terminate()
+    port = null
+  }
   const send = (request: BenchRequest): void => {
     underWay = { id: ++lastId, request }
+    port ??= open()
     port.postMessage(underWay)
   }
   const settle = (answer: BenchAnswer): void => {
@@ -36,17 +64,13 @@ export function benchClient(
     const next = waiting
     waiting = null
     if (next) send(next)
-    else if (asked) onAnswer(answer, asked.request)
+    else if (asked) onOutcome(answer, asked.request)
   }
-  port.onmessage = ({ data }) => {
-    if (data.id === underWay?.id) settle(data.answer)
-  }
-  port.onerror = (event) => settle({ status: 'failed', reason: event.message })
   return {
     ask(request) {
       if (underWay) waiting = request
       else send(request)
     },
-    close: () => port.terminate(),
+    close,
   }
 }

@@ -1,6 +1,7 @@
 /** The Bench in its address: what is chosen, what was changed, and the window. */
 import type { CandidateInput, HistoryInput } from '#core/wire/index'
-import { ASSUMPTION_ORDER, BATH_TITLES, MECHANISM_TITLES } from '../../lib/describe.tsx'
+import type { TemperatureWindow } from '../../components/charts/window.ts'
+import { ANNIHILATION_TITLES, ASSUMPTION_ORDER, BATH_TITLES, MECHANISM_TITLES } from '../../lib/describe.tsx'
 
 /** A record and one of its revisions. */
 export interface RevisionChoice {
@@ -14,16 +15,13 @@ export interface Draft {
   candidate?: CandidateInput
 }
 
-export interface TemperatureWindow {
-  hotGeV: number
-  coldGeV: number
-}
-
 export interface BenchAddress {
   history: RevisionChoice | null
   candidate: RevisionChoice | null
   draft: Draft
   window: TemperatureWindow | null
+  /** The address names a draft that was too long for it, and the tab that kept it is another one. */
+  draftMissing?: boolean
 }
 
 const choiceText = ({ recordId, number }: RevisionChoice): string => `${recordId}@${number}`
@@ -36,7 +34,8 @@ function readChoice(text: string | null): RevisionChoice | null {
 /** JSON in the letters that an address takes as they are (base64url, RFC 4648). */
 export function encodeDraft(draft: Draft): string {
   const bytes = new TextEncoder().encode(JSON.stringify(draft))
-  return btoa(String.fromCharCode(...bytes))
+  // Letter by letter: a pasted table has more bytes than a call takes arguments.
+  return btoa(Array.from(bytes, (byte) => String.fromCharCode(byte)).join(''))
     .replace(/\+/g, '-')
     .replace(/\//g, '_')
     .replace(/=+$/, '')
@@ -45,14 +44,40 @@ export function encodeDraft(draft: Draft): string {
 const isObject = (value: unknown): value is Record<string, unknown> =>
   value !== null && typeof value === 'object'
 
+const EXPANSION_KINDS: readonly unknown[] = ['radiation', 'fluid', 'early-matter', 'entropy-step']
+
 /** Whether the forms can show it; whether it can be computed from is for the core to say. */
 const isHistory = (value: unknown): boolean =>
   isObject(value) &&
   ASSUMPTION_ORDER.every((group) => group in value) &&
   isObject(value['bath']) &&
-  String(value['bath']['treatment']) in BATH_TITLES
-const isCandidate = (value: unknown): boolean =>
-  isObject(value) && String(value['mechanism']) in MECHANISM_TITLES
+  String(value['bath']['treatment']) in BATH_TITLES &&
+  isObject(value['neutrinos']) &&
+  Array.isArray(value['extraSpecies']) &&
+  value['extraSpecies'].every((species) => isObject(species) && isObject(species['coupling'])) &&
+  isObject(value['expansion']) &&
+  EXPANSION_KINDS.includes(value['expansion']['kind']) &&
+  isObject(value['today'])
+
+const isAnnihilation = (value: unknown): boolean =>
+  isObject(value) && String(value['kind']) in ANNIHILATION_TITLES
+
+const isCandidate = (value: unknown): boolean => {
+  if (!isObject(value) || !(String(value['mechanism']) in MECHANISM_TITLES)) return false
+  switch (value['mechanism']) {
+    case 'freeze-out':
+    case 'asymmetric':
+      return isAnnihilation(value['annihilation'])
+    case 'freeze-in-decay':
+      return isObject(value['parent'])
+    case 'freeze-in-scattering':
+      return isObject(value['scattering'])
+    case 'freeze-in-ultraviolet':
+      return isObject(value['ultraviolet'])
+    default:
+      return true
+  }
+}
 
 /** The parts of a decoded value that are a history and a candidate. */
 function recognised(value: unknown): Draft {
@@ -76,26 +101,56 @@ export function decodeDraft(text: string | null): Draft {
   }
 }
 
+/** Longer drafts stay out of the address: servers and proxies refuse request lines of more than about 8 kB. */
+const MOST_IN_ADDRESS = 6000
+
+const KEPT = 'kept.'
+
+/** Name of a long draft, by which the tab that keeps it knows it again: FNV-1a of its text. */
+function nameOf(encoded: string): string {
+  let hash = 0x811c9dc5
+  for (let i = 0; i < encoded.length; i++) hash = Math.imul(hash ^ encoded.charCodeAt(i), 0x01000193)
+  return `${KEPT}${(hash >>> 0).toString(36)}`
+}
+
+/** Whether the draft is too long for the address. */
+export const isTooLong = (encoded: string): boolean => encoded.length > MOST_IN_ADDRESS
+
+const draftText = (encoded: string): string => (isTooLong(encoded) ? nameOf(encoded) : encoded)
+
+/** The draft an address names: in it, or, for a long one, kept by this tab. */
+function readDraft(text: string | null, kept: string | null): Pick<BenchAddress, 'draft' | 'draftMissing'> {
+  if (!text?.startsWith(KEPT)) return { draft: decodeDraft(text) }
+  return kept !== null && nameOf(kept) === text
+    ? { draft: decodeDraft(kept) }
+    : { draft: {}, draftMissing: true }
+}
+
 function readWindow(text: string | null): TemperatureWindow | null {
   const [hotGeV, coldGeV] = (text ?? '').split(',').map(Number)
   return hotGeV && coldGeV && hotGeV > coldGeV && coldGeV > 0 ? { hotGeV, coldGeV } : null
 }
 
-export function readAddress(search: string): BenchAddress {
+/** `kept` is the long draft this tab keeps, encoded. */
+export function readAddress(search: string, kept: string | null = null): BenchAddress {
   const query = new URLSearchParams(search)
   return {
     history: readChoice(query.get('history')),
     candidate: readChoice(query.get('candidate')),
-    draft: decodeDraft(query.get('draft')),
     window: readWindow(query.get('window')),
+    ...readDraft(query.get('draft'), kept),
   }
 }
+
+/** Whether the draft of an address is too long for it, so that only the tab that keeps it knows it. */
+export const isKeptByTab = (search: string): boolean =>
+  new URLSearchParams(search).get('draft')?.startsWith(KEPT) ?? false
 
 export function writeAddress({ history, candidate, draft, window }: BenchAddress): string {
   const query = new URLSearchParams()
   if (history) query.set('history', choiceText(history))
   if (candidate) query.set('candidate', choiceText(candidate))
-  if (draft.history || draft.candidate) query.set('draft', encodeDraft(draft))
+  if (draft.history || draft.candidate) query.set('draft', draftText(encodeDraft(draft)))
   if (window) query.set('window', `${window.hotGeV.toPrecision(4)},${window.coldGeV.toPrecision(4)}`)
   const text = query.toString().replace(/%40/g, '@').replace(/%2C/g, ',')
   return text === '' ? '' : `?${text}`

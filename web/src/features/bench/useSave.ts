@@ -9,72 +9,116 @@ import type {
 } from '#core/wire/index'
 import { createEvaluation } from '../../api/evaluations.ts'
 import { createCandidate, createHistory, reviseCandidate, reviseHistory } from '../../api/records.ts'
+import type { RevisionChoice } from './draft.ts'
 import type { Chosen } from './revisions.ts'
 
 /** Whether a changed input becomes the next revision of its record, or a record of its own. */
-export type SaveAs = { as: 'revision' } | { as: 'new'; name: string }
+export type SaveAs = { as: 'revision'; parentId: string } | { as: 'new'; name: string }
+
+interface PartToSave<R, Input> {
+  chosen: Chosen<R>
+  input: Input
+  changed: boolean
+  save: SaveAs
+}
 
 export interface SaveRequest {
   note: string
-  history: { chosen: Chosen<HistoryRevision>; input: HistoryInput; changed: boolean; save: SaveAs }
-  candidate: { chosen: Chosen<CandidateRevision>; input: CandidateInput; changed: boolean; save: SaveAs }
+  history: PartToSave<HistoryRevision, HistoryInput>
+  candidate: PartToSave<CandidateRevision, CandidateInput>
   shownOmegaH2: number
+  /** What an attempt that stopped has stored already. */
+  kept: Kept
+}
+
+/** A revision of a record, new or from before. */
+interface KeptRevision extends RevisionChoice {
+  revisionId: string
+}
+
+/** The revisions that are stored, as far as saving has come. */
+export interface Kept {
+  history?: KeptRevision
+  candidate?: KeptRevision
+}
+
+export type SaveStep = 'history' | 'candidate' | 'evaluation'
+
+/** Saving ended at a step; what was stored before it stays stored. */
+export class SaveStopped extends Error {
+  readonly step: SaveStep
+  readonly reason: Error
+  readonly kept: Kept
+
+  constructor(step: SaveStep, reason: unknown, kept: Kept) {
+    super(`saving stopped at the ${step}`)
+    this.name = 'SaveStopped'
+    this.step = step
+    this.reason = reason instanceof Error ? reason : new Error(String(reason))
+    this.kept = kept
+  }
 }
 
 export interface Saved extends CreateEvaluationResult {
-  history: { recordId: string; number: number }
-  candidate: { recordId: string; number: number }
+  history: KeptRevision
+  candidate: KeptRevision
 }
 
-interface KeptRevision {
-  revisionId: string
-  recordId: string
-  number: number
+interface Shelf<Input> {
+  create(
+    name: string,
+    note: string,
+    input: Input,
+  ): Promise<{ id: string; head: { id: string; number: number } }>
+  revise(
+    id: string,
+    parentId: string,
+    note: string,
+    input: Input,
+  ): Promise<{ id: string; head: { id: string; number: number } }>
 }
 
-async function keepHistory(
-  { chosen, input, changed, save }: SaveRequest['history'],
+const HISTORIES: Shelf<HistoryInput> = { create: createHistory, revise: reviseHistory }
+const CANDIDATES: Shelf<CandidateInput> = { create: createCandidate, revise: reviseCandidate }
+
+async function keep<R extends { id: string; number: number }, Input>(
+  shelf: Shelf<Input>,
+  { chosen, input, changed, save }: PartToSave<R, Input>,
   note: string,
 ): Promise<KeptRevision> {
-  if (!changed)
-    return { revisionId: chosen.revision.id, recordId: chosen.recordId, number: chosen.revision.number }
+  const { recordId, revision } = chosen
+  if (!changed) return { revisionId: revision.id, recordId, number: revision.number }
   const record =
     save.as === 'new'
-      ? await createHistory(save.name, note, input)
-      : await reviseHistory(chosen.recordId, chosen.revision.id, note, input)
+      ? await shelf.create(save.name, note, input)
+      : await shelf.revise(recordId, save.parentId, note, input)
   return { revisionId: record.head.id, recordId: record.id, number: record.head.number }
 }
 
-async function keepCandidate(
-  { chosen, input, changed, save }: SaveRequest['candidate'],
-  note: string,
-): Promise<KeptRevision> {
-  if (!changed)
-    return { revisionId: chosen.revision.id, recordId: chosen.recordId, number: chosen.revision.number }
-  const record =
-    save.as === 'new'
-      ? await createCandidate(save.name, note, input)
-      : await reviseCandidate(chosen.recordId, chosen.revision.id, note, input)
-  return { revisionId: record.head.id, recordId: record.id, number: record.head.number }
-}
-
-async function saveAll(request: SaveRequest): Promise<Saved> {
-  const history = await keepHistory(request.history, request.note)
-  const candidate = await keepCandidate(request.candidate, request.note)
-  const result = await createEvaluation(history.revisionId, candidate.revisionId, request.shownOmegaH2)
-  return { ...result, history, candidate }
+async function saveAll({ note, history, candidate, shownOmegaH2, ...request }: SaveRequest): Promise<Saved> {
+  const kept = { ...request.kept }
+  let step: SaveStep = 'history'
+  try {
+    const keptHistory = (kept.history ??= await keep(HISTORIES, history, note))
+    step = 'candidate'
+    const keptCandidate = (kept.candidate ??= await keep(CANDIDATES, candidate, note))
+    step = 'evaluation'
+    const result = await createEvaluation(keptHistory.revisionId, keptCandidate.revisionId, shownOmegaH2)
+    return { ...result, history: keptHistory, candidate: keptCandidate }
+  } catch (error) {
+    throw new SaveStopped(step, error, kept)
+  }
 }
 
 /** Saves; every list that could show the result is fetched anew. */
 export function useSave() {
   const queries = useQueryClient()
-  return useMutation({
+  return useMutation<Saved, SaveStopped, SaveRequest>({
     mutationFn: saveAll,
-    onSettled: () =>
-      Promise.all(
-        ['histories', 'candidates', 'evaluations'].map((key) =>
-          queries.invalidateQueries({ queryKey: [key] }),
-        ),
-      ),
+    // Not waited for: what was saved is told at once, and the Bench fetches what it opens.
+    onSettled: () => {
+      for (const key of ['histories', 'candidates', 'evaluations'])
+        void queries.invalidateQueries({ queryKey: [key] })
+    },
   })
 }

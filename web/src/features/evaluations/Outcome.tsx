@@ -21,8 +21,10 @@ export function StoredAnswer({ result: { omegaH2, numericalError } }: { result: 
       </p>
       <p className="pt-2.5 text-small text-soft">
         numerical error <Num value={numericalError} digits={1} />; measured{' '}
-        <Num value={MEASURED_DENSITY.omegaH2} /> ± <Num value={MEASURED_DENSITY.standardError} />,{' '}
-        {MEASURED_DENSITY.source}
+        <span className="number">
+          {MEASURED_DENSITY.omegaH2.toFixed(4)} ± {MEASURED_DENSITY.standardError.toFixed(4)}
+        </span>
+        , {MEASURED_DENSITY.source}
       </p>
     </div>
   )

@@ -6,6 +6,7 @@ import { CandidateInputs } from './Inputs.tsx'
 import { Loaded } from './Loaded.tsx'
 import { Page } from './Page.tsx'
 import { RecordPage } from './RecordPage.tsx'
+import { candidateWordings } from './wordings.ts'
 
 /** One candidate with all its revisions. */
 export default function CandidatePage() {
@@ -22,6 +23,7 @@ export default function CandidatePage() {
             uses={{ candidateId: record.id }}
             benchLinkOf={(number) => benchLink({ candidate: { recordId: record.id, number } })}
             inputTitle="Particle"
+            wordings={candidateWordings}
           >
             {(input) => <CandidateInputs input={input} />}
           </RecordPage>

@@ -4,6 +4,7 @@ import type { CandidateSummary } from '#core/wire/index'
 import { candidatesQuery } from '../../api/records.ts'
 import { describeCandidate, MECHANISM_TITLES } from '../../lib/describe.tsx'
 import { ListPage } from './ListPage.tsx'
+import { NewOnBench } from './NewOnBench.tsx'
 import { recordColumns } from './recordColumns.tsx'
 import { RecordTable } from './RecordTable.tsx'
 import type { RecordColumn } from './RecordTable.tsx'
@@ -40,6 +41,7 @@ export default function CandidatesPage() {
     <ListPage
       title="Candidates"
       purpose="Dark-matter candidates kept by your group: how each is made, and its particle numbers."
+      action={<NewOnBench kind="candidate" />}
       of={candidates}
       emptyTitle="No candidate yet"
       emptyStep={

@@ -1,27 +1,27 @@
-import { useState } from 'react'
+import { useCopy } from '../../components/ui/useCopy.ts'
+
+const SHOWN = 12
 
 /** A digest, its beginning shown, the whole of it copied when pressed. */
 export function CopyDigest({ digest }: { digest: string }) {
-  const [copied, setCopied] = useState(false)
-  const copy = async (): Promise<void> => {
-    await navigator.clipboard.writeText(digest)
-    setCopied(true)
-  }
+  const [state, copy] = useCopy()
+  const beginning = digest.slice(0, SHOWN)
   return (
-    <span className="inline-flex items-baseline gap-2">
-      <code className="font-mono text-caption" title={digest}>
-        {digest.slice(0, 12)}
+    <span className="inline-flex max-w-full flex-wrap items-baseline gap-x-2">
+      <code className="font-mono text-caption break-all" title={digest}>
+        {state === 'refused' ? digest : beginning}
       </code>
       <button
         type="button"
         className="link text-caption"
-        aria-label={`Copy the whole digest ${digest.slice(0, 12)}`}
-        onClick={() => void copy()}
+        aria-label={`Copy the whole digest ${beginning}`}
+        onClick={() => void copy(digest)}
       >
         copy
       </button>
       <span role="status" className="text-caption text-soft">
-        {copied ? 'copied' : ''}
+        {state === 'copied' ? 'copied' : ''}
+        {state === 'refused' ? 'The browser does not let this page copy: select it instead.' : ''}
       </span>
     </span>
   )

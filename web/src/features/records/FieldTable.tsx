@@ -9,7 +9,13 @@ const AS_GIVEN = 15
 
 /** One value of a field: numbers with the unit in the field's name, words as they are. */
 export function FieldText({ path, value }: { path: string; value: FieldValue | undefined }) {
-  if (value === undefined) return <span className="text-soft">no such field</span>
+  if (value === undefined)
+    return (
+      <span className="font-normal text-soft">
+        <span aria-hidden="true">–</span>
+        <span className="sr-only">not part of it</span>
+      </span>
+    )
   if (value === null) return <span className="text-soft">not set</span>
   if (typeof value === 'boolean') return value ? 'yes' : 'no'
   if (typeof value === 'string') return value

@@ -6,6 +6,7 @@ import { historiesQuery } from '../../api/records.ts'
 import { sessionQuery } from '../../api/session.ts'
 import { BATH_TITLES, describeAssumption } from '../../lib/describe.tsx'
 import { ListPage } from './ListPage.tsx'
+import { NewOnBench } from './NewOnBench.tsx'
 import { recordColumns } from './recordColumns.tsx'
 import { RecordTable } from './RecordTable.tsx'
 import type { RecordColumn } from './RecordTable.tsx'
@@ -50,6 +51,7 @@ export default function HistoriesPage() {
     <ListPage
       title="Histories"
       purpose="Sets of thermal-history assumptions kept by your group; a saved revision never changes."
+      action={<NewOnBench kind="history" />}
       of={histories}
       emptyTitle="No history yet"
       emptyStep={

@@ -6,6 +6,7 @@ import { HistoryInputs } from './Inputs.tsx'
 import { Loaded } from './Loaded.tsx'
 import { Page } from './Page.tsx'
 import { RecordPage } from './RecordPage.tsx'
+import { historyWordings } from './wordings.ts'
 
 /** One history with all its revisions. */
 export default function HistoryPage() {
@@ -22,6 +23,7 @@ export default function HistoryPage() {
             uses={{ historyId: record.id }}
             benchLinkOf={(number) => benchLink({ history: { recordId: record.id, number } })}
             inputTitle="Assumptions"
+            wordings={historyWordings}
           >
             {(input) => <HistoryInputs input={input} />}
           </RecordPage>

@@ -7,6 +7,8 @@ import { Page } from './Page.tsx'
 interface ListPageProps<T> {
   title: string
   purpose: string
+  /** How another one is made. */
+  action?: ReactNode
   of: Loading<T[]>
   emptyTitle: string
   emptyStep: ReactNode
@@ -14,12 +16,16 @@ interface ListPageProps<T> {
 }
 
 /** A list with its title, its purpose in a line, and what to do while it is empty. */
-export function ListPage<T>({ title, purpose, of, emptyTitle, emptyStep, children }: ListPageProps<T>) {
+export function ListPage<T>(props: ListPageProps<T>) {
+  const { title, purpose, action, of, emptyTitle, emptyStep, children } = props
   return (
     <Page title={title}>
-      <header>
-        <h1>{title}</h1>
-        <p className="text-soft">{purpose}</p>
+      <header className="flex flex-wrap items-end justify-between gap-x-8 gap-y-3">
+        <div>
+          <h1>{title}</h1>
+          <p className="text-soft">{purpose}</p>
+        </div>
+        {action}
       </header>
       <Loaded of={of} what={title.toLowerCase()}>
         {(rows) =>

@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react'
+import { ApiProblem } from '../../lib/apiProblem.ts'
 import { Button } from '../../components/ui/Button.tsx'
 import { ErrorNotice, Skeleton } from '../../components/ui/Notice.tsx'
 
@@ -15,17 +16,22 @@ interface LoadedProps<T> {
   children: (data: T) => ReactNode
 }
 
+/** What is not there will not be there on asking again. */
+const isAbsent = (error: Error): boolean => error instanceof ApiProblem && error.status === 404
+
 /** Waiting, failed, or there. What was already there stays when a later question fails. */
 export function Loaded<T>({ of, what, children }: LoadedProps<T>) {
   return (
     <>
       {of.error === null ? null : (
         <ErrorNotice error={of.error}>
-          <p className="pt-1">
-            <Button variant="link" onClick={() => void of.refetch()}>
-              Try again
-            </Button>
-          </p>
+          {isAbsent(of.error) ? null : (
+            <p className="pt-1">
+              <Button variant="link" onClick={() => void of.refetch()}>
+                Try again
+              </Button>
+            </p>
+          )}
         </ErrorNotice>
       )}
       {of.data === undefined ? of.error === null ? <Rows what={what} /> : null : children(of.data)}

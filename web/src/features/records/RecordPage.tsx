@@ -10,6 +10,7 @@ import { Loaded } from './Loaded.tsx'
 import { Moment } from './Moment.tsx'
 import { RevisionList } from './RevisionList.tsx'
 import { Section } from './Section.tsx'
+import type { Wording } from './wordings.ts'
 
 interface RecordPageProps<R extends HistoryRecord | CandidateRecord> {
   record: R
@@ -18,12 +19,13 @@ interface RecordPageProps<R extends HistoryRecord | CandidateRecord> {
   uses: { historyId: string } | { candidateId: string }
   benchLinkOf: (number: number) => string
   inputTitle: string
+  wordings: (input: R['head']['input']) => Wording[]
   children: (input: R['head']['input']) => ReactNode
 }
 
 /** A history or a candidate: its revisions, what one of them says, what changed, and what was computed with it. */
 export function RecordPage<R extends HistoryRecord | CandidateRecord>(props: RecordPageProps<R>) {
-  const { record, list, uses, benchLinkOf, inputTitle, children } = props
+  const { record, list, uses, benchLinkOf, inputTitle, wordings, children } = props
   const { data: session } = useQuery(sessionQuery)
   const [search] = useSearchParams()
   const wanted = Number(search.get('revision'))
@@ -53,7 +55,7 @@ export function RecordPage<R extends HistoryRecord | CandidateRecord>(props: Rec
         </Section>
       </div>
       <Section title="What changed">
-        <CompareRevisions revisions={record.revisions} />
+        <CompareRevisions<R['head']['input']> revisions={record.revisions} wordings={wordings} />
       </Section>
       <Section title="Evaluations that use it">
         <Uses of={uses} name={record.name} />

@@ -81,7 +81,10 @@ export function RecordTable<T extends { id: string }>(props: RecordTableProps<T>
         <caption className="sr-only">{caption}</caption>
         <thead className="max-md:block">
           {table.getHeaderGroups().map((group) => (
-            <tr key={group.id} className="border-b border-rule max-md:flex max-md:flex-wrap max-md:gap-x-4">
+            <tr
+              key={group.id}
+              className="border-b border-rule max-md:flex max-md:flex-wrap max-md:items-baseline max-md:gap-x-4 max-md:before:text-caption max-md:before:content-['Sorted_by']"
+            >
               {group.headers.map((header) => (
                 <HeaderCell key={header.id} header={header} />
               ))}

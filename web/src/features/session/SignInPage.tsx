@@ -3,14 +3,11 @@ import { useState } from 'react'
 import type { FormEvent } from 'react'
 import { useNavigate, useSearchParams } from 'react-router-dom'
 import { infoQuery, sessionQuery, signIn } from '../../api/session.ts'
+import { ownAddress } from '../../app/ownAddress.ts'
 import { Wordmark } from '../../app/Wordmark.tsx'
 import { Button } from '../../components/ui/Button.tsx'
 import { Field } from '../../components/ui/Field.tsx'
 import { ErrorNotice } from '../../components/ui/Notice.tsx'
-
-/** Only an address of this product is gone to after signing in. */
-const ownAddress = (to: string | null): string =>
-  to !== null && to.startsWith('/') && !to.startsWith('//') ? to : '/bench'
 
 export default function SignInPage() {
   const [email, setEmail] = useState('')

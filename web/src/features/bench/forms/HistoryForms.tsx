@@ -119,9 +119,14 @@ function NeutrinosForm({ value, onChange }: FormProps<Neutrinos>) {
             label="Today’s entropy"
             value={value.entropyScaling}
             options={[
-              { value: 'heated', label: 'heated neutrinos, 2 + (21/11)(N/3)^¾' },
-              { value: 'linear', label: 'linear, 2 + (7/11)N' },
+              { value: 'heated', label: 'of heated neutrinos' },
+              { value: 'linear', label: 'linear in their number' },
             ]}
+            hint={
+              <>
+                Heated: 2 + (21/11)(N/3)<sup>3/4</sup>; linear, as in some papers: 2 + (7/11)N.
+              </>
+            }
             onChange={(entropyScaling) => onChange({ ...value, entropyScaling })}
           />
         </>

@@ -35,8 +35,10 @@ export function PointsField({
   value: Points
   onChange: (points: Points) => void
 }) {
-  const [typed, setTyped] = useState<string | null>(null)
-  const read = typed === null ? null : readPoints(typed)
+  const [typed, setTyped] = useState<{ text: string; points: Points | null } | null>(null)
+  // The text counts only while it stands for the rows shown: undo or reset replace it.
+  const text = typed !== null && (typed.points === null || typed.points === value) ? typed.text : null
+  const read = text === null ? null : readPoints(text)
   const fault = useFault(path)
   return (
     <Field
@@ -49,11 +51,12 @@ export function PointsField({
           {...control}
           className="input min-h-28 font-mono text-small"
           spellCheck={false}
-          value={typed ?? textOf(value)}
+          value={text ?? textOf(value)}
           onChange={(event) => {
-            setTyped(event.target.value)
             const result = readPoints(event.target.value)
-            if ('points' in result) onChange(result.points)
+            const points = 'points' in result ? result.points : null
+            setTyped({ text: event.target.value, points })
+            if (points) onChange(points)
           }}
         />
       )}
