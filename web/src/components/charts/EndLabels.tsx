@@ -71,6 +71,6 @@ const Name = ({ series, x, y }: { series: Series; x: number; y: number }) => (
     paintOrder="stroke"
     className="text-[12px]"
   >
-    {series.shortName}
+    {series.drawnName ?? series.shortName}
   </text>
 )

@@ -8,6 +8,8 @@ export interface Series {
   name: ReactNode
   /** The name as plain text, for labels in the drawing and for readers. */
   shortName: string
+  /** The same with its indices set, as SVG text; the plain text when left out. */
+  drawnName?: ReactNode
   curve: Curve
   /** Name of a colour token. */
   colour: string

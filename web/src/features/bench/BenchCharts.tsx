@@ -85,17 +85,32 @@ export const BenchCharts = memo(function BenchCharts({
         id: 'g-rho',
         name: <GRho />,
         shortName: 'gρ',
+        drawnName: <EffectiveNumber index="ρ" />,
         curve: report.gRhoCurve,
         colour: '--series-1',
         width: 2,
       },
-      { id: 'g-s', name: <GS />, shortName: 'gs', curve: report.gSCurve, colour: '--series-4', dash: '2 3' },
+      {
+        id: 'g-s',
+        name: <GS />,
+        shortName: 'gs',
+        drawnName: <EffectiveNumber index="s" />,
+        curve: report.gSCurve,
+        colour: '--series-4',
+        dash: '2 3',
+      },
       ...(differs
         ? [
             {
               id: 'baseline',
               name: 'baseline',
               shortName: 'gρ, baseline',
+              drawnName: (
+                <>
+                  <EffectiveNumber index="ρ" />
+                  <tspan dy="-0.25em">, baseline</tspan>
+                </>
+              ),
               curve: report.baselineGRhoCurve,
               colour: '--series-2',
               dash: '6 4',
@@ -177,3 +192,13 @@ function rateDomain({ rateOverHubbleCurve }: BenchReport): [number, number] {
   const top = Math.max(...[...rateOverHubbleCurve.value].filter((value) => Number.isFinite(value)), 1)
   return [1e-4, 10 ** Math.ceil(Math.log10(top))]
 }
+
+/** g with its index, for the ends of curves. */
+const EffectiveNumber = ({ index }: { index: string }) => (
+  <>
+    <tspan fontStyle="italic">g</tspan>
+    <tspan fontStyle="italic" fontSize="0.75em" dy="0.33em">
+      {index}
+    </tspan>
+  </>
+)
