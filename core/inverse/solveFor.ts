@@ -6,7 +6,10 @@
 import { abundance } from '../abundance/abundance.ts'
 import { buildHistory } from '../history/thermalHistory.ts'
 import { ConvergenceError } from '../numerics/convergence.ts'
-import { brent } from '../numerics/roots/brent.ts'
+import { brentSearch } from '../numerics/roots/brent.ts'
+import type { Sample } from '../numerics/roots/brent.ts'
+import { complete, part } from '../steps/steps.ts'
+import type { Steps } from '../steps/steps.ts'
 import { abundanceRequest } from '../wire/compute.ts'
 import { InputError, parseInput } from '../wire/fault.ts'
 import { solveRequest } from '../wire/inverse.ts'
@@ -31,11 +34,6 @@ const GOLDEN = (Math.sqrt(5) - 1) / 2
 /** ln(Ωh²/target) at ln p; NaN where the input is not allowed or does not converge. */
 type Excess = (lnValue: number) => number
 
-interface Sample {
-  at: number
-  excess: number
-}
-
 function excessOf(request: SolveRequest): {
   excess: Excess
   complaint: () => Error | null
@@ -59,72 +57,97 @@ function excessOf(request: SolveRequest): {
   return { excess, complaint: () => complaint, refused: () => refused }
 }
 
-function scan(excess: Excess, low: number, high: number): Sample[] {
+function* scan(excess: Excess, low: number, high: number): Steps<Sample[]> {
   const points = Math.max(FEWEST, Math.ceil(((high - low) / Math.LN10) * PER_DECADE))
-  return Array.from({ length: points + 1 }, (_, i) => {
+  const samples: Sample[] = []
+  for (let i = 0; i <= points; i++) {
     const at = low + ((high - low) * i) / points
-    return { at, excess: excess(at) }
-  })
+    samples.push({ at, value: excess(at) })
+    yield { done: i + 1, of: points + 1 }
+  }
+  return samples
 }
 
 /** The extreme of the excess towards zero between two samples, by golden section. */
-function turningPoint(excess: Excess, low: number, high: number, sign: number): Sample {
+function* turningPoint(excess: Excess, low: number, high: number, sign: number): Steps<Sample> {
   let [a, b] = [low, high]
   for (let i = 0; i < TURNING_STEPS; i++) {
     const [left, right] = [b - GOLDEN * (b - a), a + GOLDEN * (b - a)]
     if (sign * excess(left) < sign * excess(right)) b = right
     else a = left
+    yield { done: i + 1, of: TURNING_STEPS + 1 }
   }
   const at = (a + b) / 2
-  return { at, excess: excess(at) }
+  return { at, value: excess(at) }
 }
 
 /** The samples, and between three that bend towards the target without reaching it, their turning point. */
-function withTurningPoints(excess: Excess, samples: readonly Sample[]): Sample[] {
+function* withTurningPoints(excess: Excess, samples: readonly Sample[]): Steps<Sample[]> {
   const all = [...samples]
   for (let i = 1; i + 1 < samples.length; i++) {
     const [before, here, after] = [samples[i - 1]!, samples[i]!, samples[i + 1]!]
-    const sign = Math.sign(here.excess)
-    const bends = sign * here.excess < sign * before.excess && sign * here.excess <= sign * after.excess
-    const oneSide = Math.sign(before.excess) === sign && Math.sign(after.excess) === sign
-    if (bends && oneSide) all.push(turningPoint(excess, before.at, after.at, sign))
+    const sign = Math.sign(here.value)
+    const bends = sign * here.value < sign * before.value && sign * here.value <= sign * after.value
+    const oneSide = Math.sign(before.value) === sign && Math.sign(after.value) === sign
+    if (bends && oneSide)
+      all.push(yield* part(turningPoint(excess, before.at, after.at, sign), i, 1, samples.length))
   }
   return all.sort((a, b) => a.at - b.at)
 }
 
-/** Solves a parsed request. @throws InputError when no value in the bracket makes a valid input */
-export function solveFor(request: SolveRequest): SolveResult {
-  const searched = request.between ?? usualBracket(request.solveFor)
-  const { excess, complaint, refused } = excessOf(request)
-  const coarse = scan(excess, Math.log(searched[0]), Math.log(searched[1]))
-  const known = coarse.filter((sample) => Number.isFinite(sample.excess))
-  if (known.length === 0) throw complaint()
-  const samples = withTurningPoints(excess, coarse)
+/** ln p of every solution between neighbouring samples, ascending. */
+function* crossings(excess: Excess, samples: readonly Sample[]): Steps<number[]> {
   const solutions: number[] = []
-  for (let i = 0; i + 1 < samples.length; i++) {
-    const [a, b] = [samples[i]!, samples[i + 1]!]
-    if (a.excess === 0) solutions.push(Math.exp(a.at))
-    else if (a.excess * b.excess < 0) {
-      const root = brent(excess, a.at, b.at, TOLERANCE)
+  const of = samples.length
+  for (let i = 0; i < of; i++) {
+    const [a, b] = [samples[i]!, samples[i + 1]]
+    if (a.value === 0) solutions.push(a.at)
+    else if (b && a.value * b.value < 0) {
+      const search = brentSearch(a, b, TOLERANCE)
+      let next = search.next()
+      while (!next.done) {
+        next = search.next(excess(next.value))
+        yield { done: i, of }
+      }
       // Where the abundance leaps over the target, as in a bath of steps, there is a change of sign and no solution.
-      if (Math.abs(excess(root)) < REACHED) solutions.push(Math.exp(root))
+      if (Math.abs(excess(next.value)) < REACHED) solutions.push(next.value)
     }
   }
-  if (samples.at(-1)!.excess === 0) solutions.push(Math.exp(samples.at(-1)!.at))
+  return solutions
+}
+
+/** Shares of the scan, the turning points and the crossings in the progress told: about those of the time. */
+const SHARES = [70, 15, 15] as const
+const WHOLE = SHARES[0] + SHARES[1] + SHARES[2]
+
+/** Solves a parsed request. @throws InputError when no value in the bracket makes a valid input */
+export function* solveForSteps(request: SolveRequest): Steps<SolveResult> {
+  const searched = request.between ?? usualBracket(request.solveFor)
+  const { excess, complaint, refused } = excessOf(request)
+  const ends = [Math.log(searched[0]), Math.log(searched[1])] as const
+  const coarse = yield* part(scan(excess, ...ends), 0, SHARES[0], WHOLE)
+  const known = coarse.filter((sample) => Number.isFinite(sample.value))
+  if (known.length === 0) throw complaint()
+  const samples = yield* part(withTurningPoints(excess, coarse), SHARES[0], SHARES[1], WHOLE)
+  const roots = yield* part(crossings(excess, samples), SHARES[0] + SHARES[1], SHARES[2], WHOLE)
   const nearest = known.reduce((best, sample) =>
-    Math.abs(sample.excess) < Math.abs(best.excess) ? sample : best,
+    Math.abs(sample.value) < Math.abs(best.value) ? sample : best,
   )
   return {
-    solutions,
+    solutions: roots.map(Math.exp),
     searched: [searched[0], searched[1]],
     targetOmegaH2: request.targetOmegaH2,
     closest:
-      solutions.length > 0
+      roots.length > 0
         ? null
-        : { value: Math.exp(nearest.at), omegaH2: request.targetOmegaH2 * Math.exp(nearest.excess) },
+        : { value: Math.exp(nearest.at), omegaH2: request.targetOmegaH2 * Math.exp(nearest.value) },
     notComputable: refused(),
   }
 }
 
 /** The same from the wire. */
-export const computeSolve = (input: unknown): SolveResult => solveFor(parseInput(solveRequest, input))
+export function* solveSteps(input: unknown): Steps<SolveResult> {
+  return yield* solveForSteps(parseInput(solveRequest, input))
+}
+
+export const computeSolve = (input: unknown): SolveResult => complete(solveSteps(input))

@@ -1,6 +1,8 @@
 /** How much of a change in ln Ωh² between two histories each group of assumptions makes. */
 import { ASSUMPTION_GROUPS } from '../wire/history.ts'
 import type { AssumptionGroup, HistoryInput } from '../wire/history.ts'
+import { complete } from '../steps/steps.ts'
+import type { Steps } from '../steps/steps.ts'
 import { shapleyValues } from './shapley.ts'
 
 export interface Attribution {
@@ -35,23 +37,19 @@ const zeros = (): Record<AssumptionGroup, number> =>
  * Attributes the ratio by all subsets of the groups that differ.
  * @param omegaH2Of abundance in a history
  */
-export function attribute(
+export function* attributionSteps(
   baseline: HistoryInput,
   variant: HistoryInput,
   omegaH2Of: (history: HistoryInput) => number,
-): Attribution {
+): Steps<Attribution> {
   const groups = differingGroups(baseline, variant)
-  const values = Array.from({ length: 2 ** groups.length }, (_, subset) =>
-    Math.log(
-      omegaH2Of(
-        withGroups(
-          baseline,
-          variant,
-          groups.filter((_group, i) => (subset >> i) & 1),
-        ),
-      ),
-    ),
-  )
+  const subsets = 2 ** groups.length
+  const values = new Float64Array(subsets)
+  for (let subset = 0; subset < subsets; subset++) {
+    const taken = groups.filter((_group, i) => (subset >> i) & 1)
+    values[subset] = Math.log(omegaH2Of(withGroups(baseline, variant, taken)))
+    yield { done: subset + 1, of: subsets }
+  }
   const parts = shapleyValues(groups.length, (subset) => values[subset]!)
   const lnFactors = zeros()
   const oneAtATime = zeros()
@@ -61,3 +59,7 @@ export function attribute(
   })
   return { lnRatio: values.at(-1)! - values[0]!, lnFactors, oneAtATime }
 }
+
+/** The same at once. */
+export const attribute = (...question: Parameters<typeof attributionSteps>): Attribution =>
+  complete(attributionSteps(...question))

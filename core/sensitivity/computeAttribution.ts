@@ -5,8 +5,10 @@ import type { AttributeResult } from '../wire/attribution.ts'
 import { parseInput } from '../wire/fault.ts'
 import { ASSUMPTION_GROUPS } from '../wire/history.ts'
 import type { AssumptionGroup, HistoryInput } from '../wire/history.ts'
-import { attribute } from './attribution.ts'
-import { elasticities } from './elasticity.ts'
+import { complete, part } from '../steps/steps.ts'
+import type { Steps } from '../steps/steps.ts'
+import { attributionSteps, differingGroups } from './attribution.ts'
+import { EVALUATIONS, continuousPaths, elasticitiesSteps } from './elasticity.ts'
 
 const partsOf = (lnFactors: Record<AssumptionGroup, number>): AttributeResult['parts'] =>
   ASSUMPTION_GROUPS.map((group) => ({
@@ -16,10 +18,19 @@ const partsOf = (lnFactors: Record<AssumptionGroup, number>): AttributeResult['p
   }))
 
 /** Attributes the ratio of two abundances from the wire: parses, fills defaults in, computes every subset. */
-export function computeAttribution(input: unknown): AttributeResult {
+export function* attributeSteps(input: unknown): Steps<AttributeResult> {
   const { baseline, variant, candidate } = parseInput(attributeRequest, input)
   const omegaH2Of = (history: HistoryInput): number => abundance(buildHistory(history), candidate).omegaH2
-  const { lnRatio, lnFactors, oneAtATime } = attribute(baseline, variant, omegaH2Of)
+  const request = { history: variant, candidate }
+  const subsets = 2 ** differingGroups(baseline, variant).length
+  const moves = EVALUATIONS * continuousPaths(request).length
+  const of = subsets + moves
+  const { lnRatio, lnFactors, oneAtATime } = yield* part(
+    attributionSteps(baseline, variant, omegaH2Of),
+    0,
+    subsets,
+    of,
+  )
   const baselineOmegaH2 = omegaH2Of(baseline)
   return {
     baselineOmegaH2,
@@ -27,6 +38,8 @@ export function computeAttribution(input: unknown): AttributeResult {
     ratio: Math.exp(lnRatio),
     parts: partsOf(lnFactors),
     oneAtATime: partsOf(oneAtATime),
-    elasticities: elasticities({ history: variant, candidate }),
+    elasticities: yield* part(elasticitiesSteps(request), subsets, moves, of),
   }
 }
+
+export const computeAttribution = (input: unknown): AttributeResult => complete(attributeSteps(input))

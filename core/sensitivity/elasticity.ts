@@ -9,6 +9,8 @@ import { readPath, substitute } from '../inverse/substitute.ts'
 import { ConvergenceError } from '../numerics/convergence.ts'
 import { abundanceRequest } from '../wire/compute.ts'
 import type { AbundanceRequest } from '../wire/compute.ts'
+import { complete, part } from '../steps/steps.ts'
+import type { Steps } from '../steps/steps.ts'
 import { InputError, parseInput } from '../wire/fault.ts'
 
 export interface Elasticity {
@@ -44,29 +46,48 @@ function valueAt(value: unknown, path: readonly (string | number)[]): number {
   return path.reduce<unknown>((each, key) => (each as Record<string | number, unknown>)[key], value) as number
 }
 
-function derivative(lnOmegaAt: (factor: number) => number, step: number): number {
+/** Moves, in steps, at which both differences together want ln Ωh². */
+const MOVES = [...new Set(WEIGHTS.flatMap((_weight, i) => [i + 1, 2 * (i + 1)]))].flatMap((k) => [k, -k])
+
+/** Weighted differences over k and −k, k = spacing, 2·spacing, 3·spacing steps. */
+function derivative(lnOmegaAt: ReadonlyMap<number, number>, spacing: number): number {
   return WEIGHTS.reduce<number>((sum, weight, i) => {
-    const move = (i + 1) * step
-    return sum + (weight * (lnOmegaAt(1 + move) - lnOmegaAt(1 - move))) / step
+    const k = (i + 1) * spacing
+    return sum + (weight * (lnOmegaAt.get(k)! - lnOmegaAt.get(-k)!)) / (spacing * STEP)
   }, 0)
 }
 
-/** The elasticity of every continuous input of a parsed request. */
-export function elasticities(request: AbundanceRequest): Elasticity[] {
-  return continuousPaths(request).map((path) => {
-    const keys = readPath(path)
-    const start = valueAt(request, keys)
-    const lnOmegaAt = (factor: number): number => {
-      const { history, candidate } = parseInput(abundanceRequest, substitute(request, keys, start * factor))
-      return Math.log(abundance(buildHistory(history), candidate).omegaH2)
+/** Evaluations behind one elasticity, at most. */
+export const EVALUATIONS = MOVES.length
+
+function* elasticitySteps(request: AbundanceRequest, path: string): Steps<Elasticity> {
+  const keys = readPath(path)
+  const start = valueAt(request, keys)
+  const lnOmegaAt = new Map<number, number>()
+  try {
+    for (const move of MOVES) {
+      const moved = substitute(request, keys, start * (1 + move * STEP))
+      const { history, candidate } = parseInput(abundanceRequest, moved)
+      lnOmegaAt.set(move, Math.log(abundance(buildHistory(history), candidate).omegaH2))
+      yield { done: lnOmegaAt.size, of: EVALUATIONS }
     }
-    try {
-      const [fine, coarse] = [derivative(lnOmegaAt, STEP), derivative(lnOmegaAt, 2 * STEP)]
-      return { path, value: fine, error: 3 * Math.abs(fine - coarse) + (AMPLIFICATION * SCATTER) / STEP }
-    } catch (error) {
-      if (error instanceof InputError || error instanceof ConvergenceError)
-        return { path, value: null, error: null }
-      throw error
-    }
-  })
+  } catch (error) {
+    if (error instanceof InputError || error instanceof ConvergenceError)
+      return { path, value: null, error: null }
+    throw error
+  }
+  const [fine, coarse] = [derivative(lnOmegaAt, 1), derivative(lnOmegaAt, 2)]
+  return { path, value: fine, error: 3 * Math.abs(fine - coarse) + (AMPLIFICATION * SCATTER) / STEP }
 }
+
+/** The elasticity of every continuous input of a parsed request. */
+export function* elasticitiesSteps(request: AbundanceRequest): Steps<Elasticity[]> {
+  const paths = continuousPaths(request)
+  const found: Elasticity[] = []
+  for (const [i, path] of paths.entries())
+    found.push(yield* part(elasticitySteps(request, path), i, 1, paths.length))
+  return found
+}
+
+/** The same at once. */
+export const elasticities = (request: AbundanceRequest): Elasticity[] => complete(elasticitiesSteps(request))

@@ -4,11 +4,29 @@
  * @throws RangeError when the ends have the same sign.
  */
 export function brent(f: (x: number) => number, low: number, high: number, tolerance: number): number {
-  let [a, b] = [low, high]
-  let [fa, fb] = [f(a), f(b)]
+  const search = brentSearch({ at: low, value: f(low) }, { at: high, value: f(high) }, tolerance)
+  let next = search.next()
+  while (!next.done) next = search.next(f(next.value))
+  return next.value
+}
+
+/** A point of a function. */
+export interface Sample {
+  at: number
+  value: number
+}
+
+/** The same for a function that is evaluated elsewhere: yields each x it wants the value at, and is told it. */
+export function* brentSearch(
+  low: Sample,
+  high: Sample,
+  tolerance: number,
+): Generator<number, number, number> {
+  let [a, b] = [low.at, high.at]
+  let [fa, fb] = [low.value, high.value]
   if (fa === 0) return a
   if (fb === 0) return b
-  if (!(fa * fb < 0)) throw new RangeError(`no change of sign between ${low} and ${high}`)
+  if (!(fa * fb < 0)) throw new RangeError(`no change of sign between ${a} and ${b}`)
   let [c, fc] = [a, fa]
   let step = b - a
   let before = step
@@ -33,7 +51,7 @@ export function brent(f: (x: number) => number, low: number, high: number, toler
     step = usable ? p / q : half
     ;[a, fa] = [b, fb]
     b += Math.abs(step) > limit ? step : Math.sign(half) * limit
-    fb = f(b)
+    fb = yield b
   }
   return b
 }

@@ -1,0 +1,17 @@
+/** What can be asked of the core, by its name on the wire: from an input as it came to the steps that answer it. */
+import { computeAbundance } from './abundance/abundance.ts'
+import { computeHistory } from './history/computeHistory.ts'
+import { solveSteps } from './inverse/solveFor.ts'
+import { attributeSteps } from './sensitivity/computeAttribution.ts'
+import { atOnce } from './steps/steps.ts'
+import type { Steps } from './steps/steps.ts'
+
+/** Each throws InputError or ConvergenceError on the way, and returns what the `compute…` of that name returns. */
+export const QUESTIONS = {
+  history: (input) => atOnce(() => computeHistory(input)),
+  abundance: (input) => atOnce(() => computeAbundance(input)),
+  solve: solveSteps,
+  attribute: attributeSteps,
+} satisfies Record<string, (input: unknown) => Steps<unknown>>
+
+export type Question = keyof typeof QUESTIONS
