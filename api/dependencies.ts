@@ -15,4 +15,6 @@ export interface AppDependencies {
   /** The sign-ins to offer on the sign-in page; null outside demo mode. */
   demoSignIns: PublicInfo['demoSignIns'] | null
   signInLimits: SignInLimits
+  /** Requests a minute taken of one person, key or address; a key may carry a number of its own. */
+  requestsPerMinute: number
 }

@@ -1,15 +1,38 @@
-import type { Role } from '#core/wire/index'
+import type { KeyScope, Role } from '#core/wire/index'
 
-/** Who may do what: the only place where roles are named. */
+const EVERYONE = ['lead', 'author', 'reader'] as const
+const WRITERS = ['lead', 'author'] as const
+const LEADS = ['lead'] as const
+
+interface Rule {
+  roles: readonly Role[]
+  /** The least an API key must be allowed to do it; null for what is done in a browser only. */
+  scope: KeyScope | null
+}
+
+/** Who may do what: the only place where roles and scopes are named. */
 const MAY = {
-  read: ['lead', 'author', 'reader'],
-  compute: ['lead', 'author', 'reader'],
-  'save-revision': ['lead', 'author'],
-  'save-evaluation': ['lead', 'author'],
-} as const satisfies Record<string, readonly Role[]>
+  read: { roles: EVERYONE, scope: 'read' },
+  compute: { roles: EVERYONE, scope: 'compute' },
+  'save-revision': { roles: WRITERS, scope: 'write' },
+  'save-evaluation': { roles: WRITERS, scope: 'write' },
+  'own-keys': { roles: EVERYONE, scope: null },
+  'all-keys': { roles: LEADS, scope: null },
+  'read-audit-log': { roles: LEADS, scope: 'read' },
+} as const satisfies Record<string, Rule>
 
 export type Action = keyof typeof MAY
 
-export const rolesThatMay = (action: Action): readonly Role[] => MAY[action]
+const SCOPES: readonly KeyScope[] = ['read', 'compute', 'write']
+
+export const rolesThatMay = (action: Action): readonly Role[] => MAY[action].roles
+
+export const scopeFor = (action: Action): KeyScope | null => MAY[action].scope
 
 export const may = (role: Role, action: Action): boolean => rolesThatMay(action).includes(role)
+
+/** Whether a key of this scope reaches as far as the action; its holder's role is asked apart. */
+export function keyMay(scope: KeyScope, action: Action): boolean {
+  const needed = scopeFor(action)
+  return needed !== null && SCOPES.indexOf(scope) >= SCOPES.indexOf(needed)
+}

@@ -7,6 +7,7 @@ import { createApp } from './app.ts'
 import { EnvironmentError, readEnvironment } from './env.ts'
 import type { Environment } from './env.ts'
 import { createLogger } from './logger.ts'
+import { USUAL_REQUESTS_PER_MINUTE } from './middleware/requestLimit.ts'
 import { DEFAULT_SIGN_IN_LIMITS } from './middleware/signInLimit.ts'
 
 /** How long requests under way may take to finish after a signal, milliseconds. */
@@ -47,7 +48,14 @@ async function main(): Promise<void> {
     logger.warn({ err: error }, 'lost an idle connection'),
   )
   const people = env.demo ? (await readDemoGroup()).people : null
-  const app = createApp({ ...env, db, logger, demoSignIns: people, signInLimits: DEFAULT_SIGN_IN_LIMITS })
+  const app = createApp({
+    ...env,
+    db,
+    logger,
+    demoSignIns: people,
+    signInLimits: DEFAULT_SIGN_IN_LIMITS,
+    requestsPerMinute: USUAL_REQUESTS_PER_MINUTE,
+  })
   const server = await listen(app, env.host, env.port)
   stopOnSignal(server, close, logger)
   const { port } = server.address() as AddressInfo

@@ -11,6 +11,7 @@ import { ensurePostgresPrograms } from './setup/postgresPrograms.mjs'
 import { runProgram } from './setup/program.mjs'
 import { ROOT, inProject } from './setup/project.mjs'
 import { run } from './setup/run.mjs'
+import { ensureScriptPrograms } from './setup/scriptPrograms.mjs'
 import { beforeEnd } from './setup/stopping.mjs'
 import { add, closingLine, countsOf } from './setup/testCounts.mjs'
 import { needsOf } from './setup/testNeeds.mjs'
@@ -75,7 +76,10 @@ async function main() {
   const filters = process.argv.slice(2)
   const needs = needsOf(filters)
   await ensurePackages({ say })
-  if (needs.browser) await ensureChromium({ say })
+  if (needs.browser) {
+    await ensureChromium({ say })
+    await ensureScriptPrograms({ say })
+  }
   const cluster = needs.cluster ? await openCluster() : undefined
   const checks = filters.length === 0 ? await runChecks() : { passed: 0, failed: 0 }
   const counts = add(checks, await runTests(filters, cluster?.addresses))

@@ -1,7 +1,9 @@
+import { listAuditEndpoint } from './audit.ts'
 import { computeAbundanceEndpoint, computeHistoryEndpoint } from './compute.ts'
 import type { Endpoint } from './endpoint.ts'
 import { createEvaluationEndpoint, listEvaluationsEndpoint, readEvaluationEndpoint } from './evaluations.ts'
 import { healthEndpoint, infoEndpoint } from './info.ts'
+import { createKeyEndpoint, listKeysEndpoint, revokeKeyEndpoint } from './keys.ts'
 import { candidateEndpoints, historyEndpoints } from './records.ts'
 import { signInEndpoint, signOutEndpoint, whoAmIEndpoint } from './session.ts'
 
@@ -19,4 +21,8 @@ export const CATALOGUE: readonly Endpoint[] = [
   createEvaluationEndpoint,
   computeHistoryEndpoint,
   computeAbundanceEndpoint,
+  listKeysEndpoint,
+  createKeyEndpoint,
+  revokeKeyEndpoint,
+  listAuditEndpoint,
 ]

@@ -3,7 +3,9 @@ export const PROBLEMS = {
   'malformed-body': { status: 400, title: 'The body of the request could not be read' },
   'not-signed-in': { status: 401, title: 'Nobody is signed in' },
   'wrong-credentials': { status: 401, title: 'E-mail address and password do not go together' },
+  'bad-key': { status: 401, title: 'The API key is not valid' },
   'not-allowed': { status: 403, title: 'Your role does not allow this' },
+  'key-scope': { status: 403, title: 'The API key does not reach this far' },
   'other-site': { status: 403, title: 'The request came from another site' },
   'not-found': { status: 404, title: 'There is nothing here' },
   'stale-parent': { status: 409, title: 'A newer revision was saved meanwhile' },
@@ -12,6 +14,7 @@ export const PROBLEMS = {
   'invalid-input': { status: 422, title: 'The input is at fault' },
   'no-convergence': { status: 422, title: 'No converged number was reached' },
   'too-many-attempts': { status: 429, title: 'Too many attempts to sign in' },
+  'too-many-requests': { status: 429, title: 'Too many requests' },
   internal: { status: 500, title: 'Something went wrong on the server' },
   'database-away': { status: 503, title: 'The database does not answer' },
 } as const satisfies Record<string, { status: number; title: string }>

@@ -3,13 +3,20 @@ import { createDocument } from 'zod-openapi'
 import type { ZodOpenApiOperationObject, ZodOpenApiPathsObject } from 'zod-openapi'
 import { CATALOGUE } from '../endpoints/catalogue.ts'
 import type { Endpoint } from '../endpoints/endpoint.ts'
+import { scopeFor } from '../permissions.ts'
 import { examples } from './examples.ts'
 import type { EndpointExample } from './examples.ts'
 import { problemResponses } from './problemResponses.ts'
 
 const DESCRIPTION = `Thermal histories, dark-matter candidates and their abundances. Units stand in the names of the
-fields; natural units otherwise. Lists are cut into pages: pass the \`next\` of one as the \`cursor\` of the following.
+fields; natural units otherwise. Sign in by cookie, or send an API key as \`Authorization: Bearer SECRET\`. Lists are cut into pages: pass the \`next\` of one as the \`cursor\` of the following.
 Errors are RFC 9457 problem documents.`
+
+/** By cookie; by key too, unless the action is a person's in a browser. */
+function securityOf(may: Endpoint['may']): Record<string, string[]>[] {
+  if (may === 'anyone') return []
+  return scopeFor(may) === null ? [{ session: [] }] : [{ session: [] }, { key: [] }]
+}
 
 function operation(endpoint: Endpoint, example: EndpointExample): ZodOpenApiOperationObject {
   const { id, tag, summary, may, params, query, body, status, answer, answerIs } = endpoint
@@ -19,7 +26,7 @@ function operation(endpoint: Endpoint, example: EndpointExample): ZodOpenApiOper
     operationId: id,
     tags: [tag],
     summary,
-    security: may === 'anyone' ? [] : [{ session: [] }],
+    security: securityOf(may),
     requestParams: parameters,
     ...(body
       ? {
@@ -53,7 +60,10 @@ const build = () =>
     servers: [{ url: '/api/v1' }],
     paths: paths(),
     components: {
-      securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'emberline_session' } },
+      securitySchemes: {
+        session: { type: 'apiKey', in: 'cookie', name: 'emberline_session' },
+        key: { type: 'http', scheme: 'bearer' },
+      },
     },
   })
 

@@ -16,6 +16,8 @@ const IDS = {
   candidate: 'd5f7b9c1-2e40-4638-8d9f-8b7c6d5e4f30',
   candidateRevision: 'e608cad2-3f51-4749-9ea0-9c8d7e6f5041',
   nextRevision: '08a1b2c3-4d5e-4f60-8a7b-9c8d7e6f5a4b',
+  key: '19b2c3d4-5e6f-4071-8b9c-0d1e2f3a4b5c',
+  auditEntry: '2ac3d4e5-6f70-4182-9cad-1e2f3a4b5c6d',
   evaluation: 'f719dbe3-4062-485a-8fb1-ad9e8f706152',
 }
 const AT = '2026-10-01T09:20:00.000Z'
@@ -35,6 +37,40 @@ const session = {
   group: { id: IDS.group, name: 'Larch Valley group', baselineRevisionId: IDS.historyRevision },
   role: 'author',
   expiresAt: '2026-10-15T09:20:00.000Z',
+}
+
+const key = {
+  id: IDS.key,
+  owner: person,
+  name: 'Tables for the paper',
+  scope: 'compute',
+  beginning: 'ember_Qm4x',
+  createdAt: AT,
+  expiresAt: '2026-12-30T09:20:00.000Z',
+  lastUsedAt: null,
+  revokedAt: null,
+}
+
+const keyExamples: Record<string, EndpointExample> = {
+  listKeys: { answer: { items: [key] } },
+  createKey: {
+    body: { name: key.name, scope: key.scope, days: 90 },
+    answer: { key, secret: 'ember_Qm4x…, 49 characters' },
+  },
+  revokeKey: { answer: { ...key, revokedAt: '2026-10-02T08:00:00.000Z' } },
+}
+
+const auditExample = {
+  id: IDS.auditEntry,
+  createdAt: AT,
+  actor: person,
+  apiKeyId: null,
+  action: 'history.create',
+  subjectId: IDS.history,
+  detail: { name: 'The 2018 fit' },
+  fromAddress: '192.0.2.17',
+  fromAgent: 'Mozilla/5.0',
+  requestId: '7a1c0e52-6f0d-4a4e-9a53-7d1f6c1f2a10',
 }
 
 function recordExamples(
@@ -127,6 +163,8 @@ export function examples(): Record<string, EndpointExample> {
       candidate,
     ),
     ...evaluationExamples(history, candidate),
+    ...keyExamples,
+    listAuditEntries: { answer: { items: [auditExample], next: null } },
     computeHistory: { body: rowsAsked, answer: computeHistory(rowsAsked) },
   }
 }

@@ -4,16 +4,17 @@ import type { ZodOpenApiResponsesObject } from 'zod-openapi'
 import type { Endpoint } from '../endpoints/endpoint.ts'
 import { PROBLEMS, problemType } from '../errors/problems.ts'
 import type { ProblemKind } from '../errors/problems.ts'
-import { rolesThatMay } from '../permissions.ts'
+import { rolesThatMay, scopeFor } from '../permissions.ts'
 
 const EVERY_ROLE = rolesThatMay('read').length
 
 /** The problems an endpoint can answer with: those of its shape, and those it names. */
 function problemKindsOf(endpoint: Endpoint): ProblemKind[] {
   const { may, method, body, query, params } = endpoint
-  const kinds: ProblemKind[] = ['internal', ...(endpoint.problems ?? [])]
+  const kinds: ProblemKind[] = ['internal', 'too-many-requests', ...(endpoint.problems ?? [])]
   if (may !== 'anyone') {
-    kinds.push('not-signed-in')
+    kinds.push('not-signed-in', 'bad-key')
+    if (scopeFor(may) !== 'read') kinds.push('key-scope')
     if (rolesThatMay(may).length < EVERY_ROLE) kinds.push('not-allowed')
   }
   if (method !== 'get') kinds.push('other-site')
@@ -45,7 +46,7 @@ function responseOf(kinds: ProblemKind[]): ZodOpenApiResponsesObject[`4${string}
   return {
     description: kinds.map((kind) => PROBLEMS[kind].title).join(', or '),
     content: { 'application/problem+json': { schema: problem, examples } },
-    ...(kinds.includes('too-many-attempts') ? { headers: RETRY_AFTER } : {}),
+    ...(kinds.some((kind) => PROBLEMS[kind].status === 429) ? { headers: RETRY_AFTER } : {}),
   }
 }
 

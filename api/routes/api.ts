@@ -4,35 +4,44 @@ import type { Router } from 'express'
 import type { AppDependencies } from '../dependencies.ts'
 import { notFound } from '../errors/problemError.ts'
 import { sameOrigin } from '../middleware/sameOrigin.ts'
-import { findSession } from '../middleware/session.ts'
+import { findCaller } from '../middleware/caller.ts'
+import { requestLimit } from '../middleware/requestLimit.ts'
 import { sessionCookie } from '../middleware/sessionCookie.ts'
 import { signInLimit } from '../middleware/signInLimit.ts'
 import { apiDocument } from '../openapi/document.ts'
+import { auditService } from '../services/audit.ts'
 import { evaluationService } from '../services/evaluations.ts'
+import { keyService } from '../services/keys.ts'
 import { candidateService, historyService } from '../services/records.ts'
 import { sessionService } from '../services/sessions.ts'
 import { sessionTokens } from '../services/token.ts'
+import { auditRoutes } from './audit.ts'
 import { candidateRoutes } from './candidates.ts'
 import { computeRoutes } from './compute.ts'
 import { evaluationRoutes } from './evaluations.ts'
 import { historyRoutes } from './histories.ts'
 import { infoRoutes } from './info.ts'
+import { keyRoutes } from './keys.ts'
 import { sessionRoutes } from './session.ts'
 
 /** Everything below /api. */
 export function apiRoutes(dependencies: AppDependencies): Router {
-  const { db, publicUrl, sessionSecret, demoSignIns, signInLimits } = dependencies
+  const { db, publicUrl, sessionSecret, demoSignIns, signInLimits, requestsPerMinute } = dependencies
   const cookie = sessionCookie(publicUrl?.protocol === 'https:')
   const sessions = sessionService(db, sessionTokens(sessionSecret))
 
   const v1 = express.Router()
-  v1.use(cookieParser(), findSession(cookie, sessions.find))
+  const keys = keyService(db)
+  v1.use(cookieParser(), findCaller(cookie, { session: sessions.find, key: keys.find }))
+  v1.use(requestLimit(requestsPerMinute))
   infoRoutes(v1, db, demoSignIns)
   sessionRoutes(v1, sessions, cookie, signInLimit(signInLimits))
   historyRoutes(v1, historyService(db))
   candidateRoutes(v1, candidateService(db))
   evaluationRoutes(v1, evaluationService(db))
   computeRoutes(v1)
+  keyRoutes(v1, keys)
+  auditRoutes(v1, auditService(db))
 
   const api = express.Router()
   api.use((_req, res, next) => {

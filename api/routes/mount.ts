@@ -4,7 +4,7 @@ import type { z } from 'zod'
 import type { Endpoint } from '../endpoints/endpoint.ts'
 import { notFound } from '../errors/problemError.ts'
 import { jsonBody } from '../middleware/jsonBody.ts'
-import { requireAction } from '../middleware/session.ts'
+import { requireAction } from '../middleware/caller.ts'
 
 /** What a handler gets: the parsed parts of the request, and express's own pair for the few that set cookies. */
 export interface Call<Params, Query, Body> {

@@ -1,6 +1,6 @@
 import type { RequestHandler, Router } from 'express'
 import { signInEndpoint, signOutEndpoint, whoAmIEndpoint } from '../endpoints/session.ts'
-import { requireSession, sessionOf } from '../middleware/session.ts'
+import { callerOf, originOf, requireCaller } from '../middleware/caller.ts'
 import type { SessionCookie } from '../middleware/sessionCookie.ts'
 import { sessionInfoOf } from '../services/sessions.ts'
 import type { SessionService } from '../services/sessions.ts'
@@ -15,19 +15,20 @@ export function sessionRoutes(
   mount(
     router,
     signInEndpoint,
-    async ({ body, res }) => {
-      const { info, token, expiresAt } = await sessions.signIn(body.email, body.password)
+    async ({ body, req, res }) => {
+      const { info, token, expiresAt } = await sessions.signIn(body.email, body.password, originOf(req, res))
       cookie.set(res, token, expiresAt)
       return info
     },
     limits,
   )
 
-  mount(router, whoAmIEndpoint, async ({ res }) => sessionInfoOf(requireSession(res)))
+  mount(router, whoAmIEndpoint, async ({ res }) => sessionInfoOf(requireCaller(res)))
 
   mount(router, signOutEndpoint, async ({ res }) => {
-    const session = sessionOf(res)
-    if (session !== null) await sessions.signOut(session)
+    const caller = callerOf(res)
+    // A key is ended where keys are; it has no session to close.
+    if (caller !== null && caller.key === null) await sessions.signOut(caller)
     cookie.clear(res)
   })
 }

@@ -7,8 +7,9 @@ import { candidateQueries } from '#db/queries/candidates'
 import { findEvaluation, insertEvaluation, listEvaluations } from '#db/queries/evaluations'
 import type { EvaluationFilter, StoredEvaluation } from '#db/queries/evaluations'
 import { historyQueries } from '#db/queries/histories'
-import type { LiveSession } from '#db/queries/sessions'
 import { notFound } from '../errors/problemError.ts'
+import type { Caller } from '../middleware/caller.ts'
+import { audit } from './audit.ts'
 import { pageAnswer, pageRequest } from './cursor.ts'
 
 /** Two machines may round differently below this, relative, however exact the method claims to be. */
@@ -39,8 +40,8 @@ interface EvaluationRequest {
 type ListRequest = EvaluationFilter & { limit: number; cursor?: string | undefined }
 
 export function evaluationService(db: Database) {
-  const revisionsOf = (session: LiveSession, request: EvaluationRequest) =>
-    withGroup(db, session.group.id, async (tx) => {
+  const revisionsOf = (caller: Caller, request: EvaluationRequest) =>
+    withGroup(db, caller.group.id, async (tx) => {
       const history = await historyQueries.findRevision(tx, request.historyRevisionId)
       if (history === null) throw notFound('history revision')
       const candidate = await candidateQueries.findRevision(tx, request.candidateRevisionId)
@@ -48,8 +49,8 @@ export function evaluationService(db: Database) {
       return { history, candidate }
     })
 
-  const read = (session: LiveSession, id: string): Promise<Evaluation> =>
-    withGroup(db, session.group.id, async (tx) => {
+  const read = (caller: Caller, id: string): Promise<Evaluation> =>
+    withGroup(db, caller.group.id, async (tx) => {
       const stored = await findEvaluation(tx, id)
       if (stored === null) throw notFound('evaluation')
       return writeEvaluation(stored)
@@ -58,29 +59,31 @@ export function evaluationService(db: Database) {
   return {
     read,
 
-    async list(session: LiveSession, query: ListRequest) {
+    async list(caller: Caller, query: ListRequest) {
       const request = pageRequest(query)
-      const page = await withGroup(db, session.group.id, (tx) => listEvaluations(tx, query, request))
+      const page = await withGroup(db, caller.group.id, (tx) => listEvaluations(tx, query, request))
       return pageAnswer(page, writeEvaluation)
     },
 
     /** Computes between two transactions: revisions never change, and no connection waits for the solver. */
-    async create(session: LiveSession, request: EvaluationRequest): Promise<CreateEvaluationResult> {
-      const { history, candidate } = await revisionsOf(session, request)
+    async create(caller: Caller, request: EvaluationRequest): Promise<CreateEvaluationResult> {
+      const { history, candidate } = await revisionsOf(caller, request)
       const input = { history: history.input, candidate: candidate.input }
       const result = computeAbundance(input)
-      const id = await withGroup(db, session.group.id, (tx) =>
-        insertEvaluation(tx, {
-          groupId: session.group.id,
-          authorId: session.user.id,
+      const id = await withGroup(db, caller.group.id, async (tx) => {
+        const stored = await insertEvaluation(tx, {
+          groupId: caller.group.id,
+          authorId: caller.user.id,
           history,
           candidate,
           coreVersion: CORE_VERSION,
           inputDigest: digestOf(input),
           result,
-        }),
-      )
-      return { evaluation: await read(session, id), shown: compareShown(request.shownOmegaH2, result) }
+        })
+        await audit(tx, caller, 'evaluation.create', stored, { omegaH2: result.omegaH2 })
+        return stored
+      })
+      return { evaluation: await read(caller, id), shown: compareShown(request.shownOmegaH2, result) }
     },
   }
 }

@@ -5,9 +5,10 @@ import type { Database, GroupTransaction } from '#db/database'
 import { candidateQueries } from '#db/queries/candidates'
 import { historyQueries } from '#db/queries/histories'
 import type { RecordQueries } from '#db/queries/records'
-import type { LiveSession } from '#db/queries/sessions'
 import type { RevisionDraft, StoredRecord, StoredRevision, StoredSummary } from '#db/queries/storedRecord'
 import { ProblemError, notFound } from '../errors/problemError.ts'
+import type { Caller } from '../middleware/caller.ts'
+import { audit } from './audit.ts'
 import { pageAnswer, pageRequest } from './cursor.ts'
 
 const writeRevision = <Input>(revision: StoredRevision<Input>) => ({
@@ -42,10 +43,10 @@ interface Content<Input> {
 }
 
 /** Histories and candidates differ in their input alone: this is what a group does with either. */
-function recordService<Input>(db: Database, noun: string, queries: RecordQueries<Input>) {
-  const draftOf = (session: LiveSession, { note, input }: Content<Input>): RevisionDraft<Input> => ({
-    groupId: session.group.id,
-    authorId: session.user.id,
+function recordService<Input>(db: Database, noun: 'history' | 'candidate', queries: RecordQueries<Input>) {
+  const draftOf = (caller: Caller, { note, input }: Content<Input>): RevisionDraft<Input> => ({
+    groupId: caller.group.id,
+    authorId: caller.user.id,
     note,
     digest: digestOf(input),
     input,
@@ -58,26 +59,32 @@ function recordService<Input>(db: Database, noun: string, queries: RecordQueries
   }
 
   return {
-    async list(session: LiveSession, query: { limit: number; cursor?: string | undefined }) {
+    async list(caller: Caller, query: { limit: number; cursor?: string | undefined }) {
       const request = pageRequest(query)
-      const page = await withGroup(db, session.group.id, (tx) => queries.list(tx, request))
+      const page = await withGroup(db, caller.group.id, (tx) => queries.list(tx, request))
       return pageAnswer(page, (row) => writeSummary(row))
     },
 
-    read: (session: LiveSession, id: string) => withGroup(db, session.group.id, (tx) => readIn(tx, id)),
+    read: (caller: Caller, id: string) => withGroup(db, caller.group.id, (tx) => readIn(tx, id)),
 
-    create: (session: LiveSession, request: Content<Input> & { name: string }) =>
-      withGroup(db, session.group.id, async (tx) => {
-        const { recordId } = await queries.create(tx, request.name, draftOf(session, request))
+    create: (caller: Caller, request: Content<Input> & { name: string }) =>
+      withGroup(db, caller.group.id, async (tx) => {
+        const { recordId } = await queries.create(tx, request.name, draftOf(caller, request))
+        await audit(tx, caller, `${noun}.create`, recordId, { name: request.name })
         return readIn(tx, recordId)
       }),
 
-    revise: (session: LiveSession, id: string, request: Content<Input> & { parentId: string }) =>
-      withGroup(db, session.group.id, async (tx) => {
-        const appended = await queries.append(tx, id, request.parentId, draftOf(session, request))
+    revise: (caller: Caller, id: string, request: Content<Input> & { parentId: string }) =>
+      withGroup(db, caller.group.id, async (tx) => {
+        const appended = await queries.append(tx, id, request.parentId, draftOf(caller, request))
         if (appended.outcome === 'no-such-record') throw notFound(noun)
         if (appended.outcome === 'stale-parent') throw staleParent(noun, appended.newest)
-        return readIn(tx, id)
+        const record = await readIn(tx, id)
+        await audit(tx, caller, `${noun}.revise`, id, {
+          name: record.name,
+          revision: record.head.number,
+        })
+        return record
       }),
   }
 }

@@ -6,6 +6,8 @@ import { hashPassword, passwordMatches } from '#db/passwordHash'
 import { findAccount, insertSession, revokeSession, useSession } from '#db/queries/sessions'
 import type { LiveSession } from '#db/queries/sessions'
 import { ProblemError } from '../errors/problemError.ts'
+import type { Caller, RequestOrigin } from '../middleware/caller.ts'
+import { audit } from './audit.ts'
 import type { SessionTokens } from './token.ts'
 
 const LIFETIME_DAYS = 14
@@ -18,9 +20,9 @@ export interface SignedIn {
 }
 
 export interface SessionService {
-  signIn(email: string, password: string): Promise<SignedIn>
+  signIn(email: string, password: string, from: RequestOrigin): Promise<SignedIn>
   find(token: string): Promise<LiveSession | null>
-  signOut(session: LiveSession): Promise<void>
+  signOut(caller: Caller): Promise<void>
 }
 
 export const sessionInfoOf = ({ user, group, role, expiresAt }: LiveSession): SessionInfo => ({
@@ -34,16 +36,17 @@ export function sessionService(db: Database, tokens: SessionTokens): SessionServ
   /** Checked in place of an unknown account's password, so that the answer takes the same work and time. */
   const decoy = hashPassword(randomUUID())
 
-  const openSession = async (groupId: string, userId: string): Promise<SignedIn> => {
+  const openSession = async (groupId: string, userId: string, from: RequestOrigin): Promise<SignedIn> => {
     const expiresAt = new Date(Date.now() + LIFETIME_DAYS * DAY_MS)
     const id = await withGroup(db, groupId, (tx) => insertSession(tx, { groupId, userId, expiresAt }))
     const session = await useSession(db, id)
     if (session === null) throw new Error('a session just opened is not there')
+    await withGroup(db, groupId, (tx) => audit(tx, { ...session, key: null, from }, 'session.open', id))
     return { info: sessionInfoOf(session), token: await tokens.issue(id, expiresAt), expiresAt }
   }
 
   return {
-    async signIn(email, password) {
+    async signIn(email, password, from) {
       const account = await findAccount(db, email)
       const matches = await passwordMatches(account?.passwordHash ?? (await decoy), password)
       if (account === null || !matches) {
@@ -52,7 +55,7 @@ export function sessionService(db: Database, tokens: SessionTokens): SessionServ
           'No account has this e-mail address with this password. Check both and try again.',
         )
       }
-      return openSession(account.groupId, account.userId)
+      return openSession(account.groupId, account.userId, from)
     },
 
     async find(token) {
@@ -60,6 +63,10 @@ export function sessionService(db: Database, tokens: SessionTokens): SessionServ
       return id === null ? null : useSession(db, id)
     },
 
-    signOut: (session) => withGroup(db, session.group.id, (tx) => revokeSession(tx, session.id)),
+    signOut: (caller) =>
+      withGroup(db, caller.group.id, async (tx) => {
+        await revokeSession(tx, caller.id)
+        await audit(tx, caller, 'session.close', caller.id)
+      }),
   }
 }

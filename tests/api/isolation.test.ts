@@ -35,6 +35,20 @@ describe('another group’s data', () => {
     expect(JSON.stringify(body)).not.toContain('Birch')
   })
 
+  it('leaves their keys and their audit log out of sight, and their keys in force', async () => {
+    const keys = await lead.get('/api/v1/keys?of=group')
+    expect((keys.body as { items: { id: string }[] }).items.map(({ id }) => id)).toEqual([ours.keyId])
+    expectProblem(await lead.delete(`/api/v1/keys/${theirs.keyId}`), 'not-found')
+    const { rows } = await harness.owner.query('select revoked_at from api_keys where id = $1', [
+      theirs.keyId,
+    ])
+    expect(rows).toEqual([{ revoked_at: null }])
+    const log = await lead.get('/api/v1/audit')
+    expect(log.status).toBe(200)
+    expect(log.text).not.toContain(theirs.keyId)
+    expect(log.text).not.toContain(harness.birch.id)
+  })
+
   it('cannot be revised', async () => {
     const history2 = { parentId: theirs.history.revisionId, input: history }
     const candidate2 = { parentId: theirs.candidate.revisionId, input: candidate }

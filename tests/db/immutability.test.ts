@@ -30,6 +30,7 @@ describe.each([
   ['history_revisions', 'note'],
   ['candidate_revisions', 'note'],
   ['evaluations', 'core_version'],
+  ['audit_entries', 'action'],
 ])('a row of %s', (table, column) => {
   const attempts = [
     `update ${table} set ${column} = 'rewritten'`,

@@ -15,6 +15,8 @@ afterAll(async () => {
 })
 
 const TENANT_TABLES = [
+  'api_keys',
+  'audit_entries',
   'candidate_revisions',
   'candidates',
   'evaluations',
@@ -69,6 +71,7 @@ describe('the server’s role', () => {
          and has_column_privilege(current_user, c.oid, a.attnum, 'update') order by 1`,
     )
     expect(rows.map(({ at }) => at)).toEqual([
+      'api_keys.revoked_at',
       'candidates.latest_number',
       'candidates.updated_at',
       'histories.latest_number',
@@ -79,6 +82,13 @@ describe('the server’s role', () => {
 
   it('cannot read the hash of a password from the table', async () => {
     await expect(server.query('select password_hash from users')).rejects.toThrow('permission denied')
+  })
+
+  it('cannot read the hash of a key’s secret, nor give a key a rate of its own', async () => {
+    await expect(server.query('select secret_hash from api_keys')).rejects.toThrow('permission denied')
+    await expect(server.query('update api_keys set requests_per_minute = 1')).rejects.toThrow(
+      'permission denied',
+    )
   })
 
   it('cannot create tables', async () => {
@@ -104,7 +114,7 @@ describe('row-level security', () => {
       `select proname, proconfig, has_function_privilege('public', oid, 'execute') as open
        from pg_proc where prosecdef and pronamespace = 'public'::regnamespace order by proname`,
     )
-    expect(rows.map(({ proname }) => proname)).toEqual(['account_for_sign_in', 'use_session'])
+    expect(rows.map(({ proname }) => proname)).toEqual(['account_for_sign_in', 'use_api_key', 'use_session'])
     for (const { proconfig, open } of rows) {
       expect(proconfig).toContainEqual(expect.stringMatching(/^search_path=pg_catalog, public, pg_temp$/))
       expect(open).toBe(false)

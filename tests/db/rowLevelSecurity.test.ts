@@ -45,6 +45,8 @@ const TABLES: [table: string, group: string, columns: string, each: number][] = 
   ['candidates', 'group_id', '*', 1],
   ['candidate_revisions', 'group_id', '*', 1],
   ['evaluations', 'group_id', '*', 1],
+  ['api_keys', 'group_id', 'id, user_id, name', 1],
+  ['audit_entries', 'group_id', '*', 1],
   ['users', 'id', 'id, name, email', 3],
 ]
 

@@ -193,7 +193,7 @@ describe('a reader', () => {
 })
 
 describe('anyone', () => {
-  const PAGES = ['/bench', '/histories', '/candidates', '/evaluations']
+  const PAGES = ['/bench', '/histories', '/candidates', '/evaluations', '/keys', '/audit', '/reference']
 
   it.each([
     ['by day on a wide screen', { width: 1440 }],
@@ -209,7 +209,7 @@ describe('anyone', () => {
         await page.goto(`${server.url}${path}`)
         await page.getByRole('main').waitFor()
         if (path === '/bench') await abundanceShown(page)
-        else await page.locator('main a[href]').first().waitFor()
+        else await page.locator('main table, main a[href]').first().waitFor()
         const overflow = await page.evaluate(
           'document.documentElement.scrollWidth - document.documentElement.clientWidth',
         )

@@ -15,6 +15,7 @@ export const addressOf = (endpoint: Endpoint, id = ''): string =>
   `/api/v1${endpoint.path.replace('{id}', id)}`
 
 function recordOf(endpoint: Endpoint, saved: Saved): { id: string; revisionId?: string } {
+  if (endpoint.tag === 'keys') return { id: saved.keyId }
   if (endpoint.tag === 'evaluations') return { id: saved.evaluationId }
   const { recordId, revisionId } = endpoint.tag === 'histories' ? saved.history : saved.candidate
   return { id: recordId, revisionId }

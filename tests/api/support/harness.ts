@@ -41,6 +41,7 @@ export async function startHarness(): Promise<Harness> {
       webRoot: 'no-such-folder',
       demoSignIns: null,
       signInLimits: { perAddress: 100, perAccount: 100 },
+      requestsPerMinute: 10_000,
       ...changed,
     })
   const app = appWith({})

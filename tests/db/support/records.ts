@@ -1,9 +1,13 @@
+import { randomBytes } from 'node:crypto'
 import { computeAbundance } from '#core/index'
 import { candidateInput, digestOf, historyInput } from '#core/wire/index'
 import { connect, withGroup } from '#db/database'
 import { candidateQueries } from '#db/queries/candidates'
 import { insertEvaluation } from '#db/queries/evaluations'
 import { historyQueries } from '#db/queries/histories'
+import { insertKey } from '#db/queries/apiKeys'
+import type { GroupTransaction } from '#db/database'
+import { insertAuditEntry } from '#db/queries/auditEntries'
 import type { Member, TestGroup } from './groups.ts'
 
 export const history = historyInput.parse({ bath: { treatment: 'thresholds' } })
@@ -28,8 +32,33 @@ const draft = <Input>(group: TestGroup, author: Member, input: Input) => ({
   input,
 })
 
+/** A key of a member, with an entry in the audit log; nobody knows its secret. */
+async function saveKey(tx: GroupTransaction, group: TestGroup, holder: Member): Promise<string> {
+  const id = await insertKey(tx, {
+    groupId: group.id,
+    userId: holder.id,
+    name: 'set by a test',
+    scope: 'read',
+    secretHash: randomBytes(32).toString('hex'),
+    beginning: 'ember_abcd',
+    expiresAt: new Date(Date.now() + 86_400_000),
+  })
+  await insertAuditEntry(tx, {
+    groupId: group.id,
+    actorId: holder.id,
+    apiKeyId: null,
+    action: 'key.create',
+    subjectId: id,
+    detail: { name: 'set by a test' },
+    fromAddress: '192.0.2.1',
+    fromAgent: null,
+    requestId: null,
+  })
+  return id
+}
+
 /** Stores a history, a candidate and an evaluation of the two, through the server's own role and queries. */
-export async function saveOneOfEach(serverUrl: string, group: TestGroup) {
+export async function saveOneOfEach(serverUrl: string, group: TestGroup, keyHolder = group.reader) {
   const { db, close } = connect(serverUrl, () => undefined)
   const input = { history, candidate }
   try {
@@ -54,7 +83,8 @@ export async function saveOneOfEach(serverUrl: string, group: TestGroup) {
         inputDigest: digestOf(input),
         result: computeAbundance(input),
       })
-      return { history: savedHistory, candidate: savedCandidate, evaluationId }
+      const keyId = await saveKey(tx, group, keyHolder)
+      return { history: savedHistory, candidate: savedCandidate, evaluationId, keyId }
     })
   } finally {
     await close()

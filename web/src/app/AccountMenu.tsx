@@ -1,6 +1,6 @@
 import { useQueryClient } from '@tanstack/react-query'
 import { useCallback, useId, useRef, useState } from 'react'
-import { useNavigate } from 'react-router-dom'
+import { Link, useNavigate } from 'react-router-dom'
 import { signOut } from '../api/session.ts'
 import type { KnownSession } from '../api/session.ts'
 import { Button } from '../components/ui/Button.tsx'
@@ -52,6 +52,19 @@ export function AccountMenu({ session }: { session: KnownSession }) {
               {session.role} of {session.group.name}
             </span>
           </p>
+          <nav aria-label="Account" className="grid w-full justify-items-start gap-1">
+            <Link to="/keys" className="link" onClick={close}>
+              API keys
+            </Link>
+            <Link to="/reference" className="link" onClick={close}>
+              API reference
+            </Link>
+            {session.role === 'lead' ? (
+              <Link to="/audit" className="link" onClick={close}>
+                Audit log
+              </Link>
+            ) : null}
+          </nav>
           <ThemeSwitch />
           <SignOut />
         </div>

@@ -1,15 +1,8 @@
 /** A chart as a file: the drawing with its colours written in, the picture, the numbers. */
 import type { Curve } from '#core/bench/types'
 import { valueAtTemperature } from './curvePath.ts'
+import { saveFile } from '../../lib/saveFile.ts'
 import type { Series } from './series.ts'
-
-function save(blob: Blob, name: string): void {
-  const link = document.createElement('a')
-  link.href = URL.createObjectURL(blob)
-  link.download = name
-  link.click()
-  setTimeout(() => URL.revokeObjectURL(link.href), 10_000)
-}
 
 const fileName = (title: string, ending: string): string =>
   `${title
@@ -48,7 +41,7 @@ function standalone(svg: SVGSVGElement): string {
 }
 
 export function saveSvg(svg: SVGSVGElement, title: string): void {
-  save(new Blob([standalone(svg)], { type: 'image/svg+xml' }), fileName(title, 'svg'))
+  saveFile(new Blob([standalone(svg)], { type: 'image/svg+xml' }), fileName(title, 'svg'))
 }
 
 const PNG_SCALE = 2
@@ -66,7 +59,7 @@ export async function savePng(svg: SVGSVGElement, title: string): Promise<void> 
   context.fillRect(0, 0, canvas.width, canvas.height)
   context.drawImage(image, 0, 0, canvas.width, canvas.height)
   canvas.toBlob((blob) => {
-    if (blob) save(blob, fileName(title, 'png'))
+    if (blob) saveFile(blob, fileName(title, 'png'))
   })
 }
 
@@ -88,5 +81,5 @@ export function csvText(series: readonly Series[]): string {
 }
 
 export function saveCsv(series: readonly Series[], title: string): void {
-  save(new Blob([csvText(series)], { type: 'text/csv' }), fileName(title, 'csv'))
+  saveFile(new Blob([csvText(series)], { type: 'text/csv' }), fileName(title, 'csv'))
 }

@@ -10,6 +10,8 @@ interface ListPageProps<T> {
   /** How another one is made. */
   action?: ReactNode
   of: Loading<T[]>
+  /** What stands above the list whether or not it is empty, such as filters that the server applies. */
+  above?: ReactNode
   emptyTitle: string
   emptyStep: ReactNode
   children: (rows: T[]) => ReactNode
@@ -17,7 +19,7 @@ interface ListPageProps<T> {
 
 /** A list with its title, its purpose in a line, and what to do while it is empty. */
 export function ListPage<T>(props: ListPageProps<T>) {
-  const { title, purpose, action, of, emptyTitle, emptyStep, children } = props
+  const { title, purpose, action, of, above, emptyTitle, emptyStep, children } = props
   return (
     <Page title={title}>
       <header className="flex flex-wrap items-end justify-between gap-x-8 gap-y-3">
@@ -27,6 +29,7 @@ export function ListPage<T>(props: ListPageProps<T>) {
         </div>
         {action}
       </header>
+      {above}
       <Loaded of={of} what={title.toLowerCase()}>
         {(rows) =>
           rows.length === 0 ? <EmptyState title={emptyTitle}>{emptyStep}</EmptyState> : children(rows)

@@ -1,0 +1,24 @@
+/** What each entry of the log says in words; an action not known here is shown as it is. */
+const ACTIONS: Record<string, string> = {
+  'history.create': 'made a history',
+  'history.revise': 'revised a history',
+  'candidate.create': 'made a candidate',
+  'candidate.revise': 'revised a candidate',
+  'evaluation.create': 'stored an evaluation',
+  'key.create': 'made an API key',
+  'key.revoke': 'revoked an API key',
+  'session.open': 'signed in',
+  'session.close': 'signed out',
+}
+
+export const actionWords = (action: string): string => ACTIONS[action] ?? action
+
+/** Kinds of record the log can be narrowed to. */
+export const KINDS = [
+  { value: '', label: 'everything' },
+  { value: 'history', label: 'histories' },
+  { value: 'candidate', label: 'candidates' },
+  { value: 'evaluation', label: 'evaluations' },
+  { value: 'key', label: 'API keys' },
+  { value: 'session', label: 'signing in and out' },
+] as const
