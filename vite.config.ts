@@ -2,6 +2,8 @@ import tailwindcss from '@tailwindcss/vite'
 import react from '@vitejs/plugin-react'
 import { defineConfig } from 'vite'
 
+const API = `http://127.0.0.1:${process.env['EMBERLINE_API_PORT'] ?? '4500'}`
+
 export default defineConfig({
   root: 'web',
   plugins: [react(), tailwindcss()],
@@ -10,6 +12,6 @@ export default defineConfig({
   server: {
     host: '127.0.0.1',
     strictPort: true,
-    proxy: { '/api': `http://127.0.0.1:${process.env['EMBERLINE_API_PORT'] ?? '4500'}` },
+    proxy: { '/api': API, '/mail': API },
   },
 })

@@ -7,6 +7,8 @@ import { requestId } from './middleware/requestId.ts'
 import { requestLog } from './middleware/requestLog.ts'
 import { securityHeaders } from './middleware/securityHeaders.ts'
 import { apiRoutes } from './routes/api.ts'
+import { mailSinkRoutes } from './routes/mailSink.ts'
+import { operationRoutes } from './routes/operations.ts'
 import { pageRoutes } from './routes/pages.ts'
 
 /** Builds the server from what it depends on; listening is left to the caller. */
@@ -19,6 +21,8 @@ export function createApp(dependencies: AppDependencies): Express {
   app.use(securityHeaders(dependencies.publicUrl?.protocol === 'https:'))
   app.use(compression())
   app.use('/api', apiRoutes(dependencies))
+  app.use(operationRoutes(dependencies.db, dependencies.queue.isRunning))
+  if (dependencies.mailSink !== null) app.use('/mail', mailSinkRoutes(dependencies.mailSink))
   app.use(pageRoutes(dependencies.webRoot))
   app.use(problemHandler)
   return app

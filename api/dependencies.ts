@@ -1,16 +1,21 @@
 import type { PublicInfo } from '#core/wire/index'
 import type { Database } from '#db/database'
+import type { JobQueue } from '#db/queue/jobQueue'
 import type { Logger } from 'pino'
+import type { MailSink } from './mail/sink.ts'
 import type { SignInLimits } from './middleware/signInLimit.ts'
 
 /** What the server is built from; tests give their own. */
 export interface AppDependencies {
   /** Signed in as the server's own role. */
   db: Database
+  queue: JobQueue
   logger: Logger
   sessionSecret: string
   /** The address people type, when a proxy stands in front; null for the address listened on. */
   publicUrl: URL | null
+  /** Where mails are caught to be read on a page; null outside demo and development. */
+  mailSink: MailSink | null
   webRoot: string
   /** The sign-ins to offer on the sign-in page; null outside demo mode. */
   demoSignIns: PublicInfo['demoSignIns'] | null

@@ -1,17 +1,25 @@
 import type { Server } from 'node:http'
 import type { AddressInfo } from 'node:net'
 import { connect } from '#db/database'
+import { jobQueue } from '#db/queue/jobQueue'
 import { readDemoGroup } from '#db/seed/demoData'
 import type { Logger } from 'pino'
 import { createApp } from './app.ts'
 import { EnvironmentError, readEnvironment } from './env.ts'
 import type { Environment } from './env.ts'
+import { runJobs } from './jobs/jobs.ts'
 import { createLogger } from './logger.ts'
+import { smtpSender } from './mail/sender.ts'
+import type { MailSender } from './mail/sender.ts'
+import type { MailSink } from './mail/sink.ts'
 import { USUAL_REQUESTS_PER_MINUTE } from './middleware/requestLimit.ts'
 import { DEFAULT_SIGN_IN_LIMITS } from './middleware/signInLimit.ts'
+import { sealer } from './secrets/sealer.ts'
 
 /** How long requests under way may take to finish after a signal, milliseconds. */
 const PATIENCE_MS = 10_000
+/** How long jobs under way may take after that, before they are given back to the queue. */
+const JOB_PATIENCE_MS = 3_000
 
 function environmentOrExit(): Environment {
   try {
@@ -29,7 +37,16 @@ function listen(app: ReturnType<typeof createApp>, host: string, port: number): 
   })
 }
 
-/** Stops accepting, lets requests under way finish, closes the database, and leaves with status 0. */
+/** Where mails go: the mail server set, or in demo mode a sink of our own; nowhere yet when neither. */
+async function openMail(env: Environment): Promise<{ sender: MailSender | null; sink: MailSink | null }> {
+  if (env.mail !== null) return { sender: smtpSender(env.mail.url, env.mail.from), sink: null }
+  if (!env.demo) return { sender: null, sink: null }
+  const { startMailSink } = await import('./mail/sink.ts')
+  const sink = await startMailSink()
+  return { sender: smtpSender(sink.url, 'Emberline <emberline@demo.example>'), sink }
+}
+
+/** Stops accepting, lets requests and jobs under way finish, closes the database, and leaves with status 0. */
 function stopOnSignal(server: Server, close: () => Promise<void>, logger: Logger): void {
   const stop = (signal: string): void => {
     logger.info({ signal }, 'stopping')
@@ -47,17 +64,30 @@ async function main(): Promise<void> {
   const { db, close } = connect(env.databaseUrl, (error) =>
     logger.warn({ err: error }, 'lost an idle connection'),
   )
+  const queue = jobQueue(env.databaseUrl, (error) => logger.warn({ err: error }, 'trouble with the queue'))
+  const { sender, sink } = await openMail(env)
   const people = env.demo ? (await readDemoGroup()).people : null
   const app = createApp({
     ...env,
     db,
+    queue,
     logger,
+    mailSink: sink,
     demoSignIns: people,
     signInLimits: DEFAULT_SIGN_IN_LIMITS,
     requestsPerMinute: USUAL_REQUESTS_PER_MINUTE,
   })
   const server = await listen(app, env.host, env.port)
-  stopOnSignal(server, close, logger)
+  const ended = new AbortController()
+  const jobs = runJobs({ db, queue, sealer: sealer(env.sessionSecret), sender, logger }, ended.signal)
+  const closeAll = async (): Promise<void> => {
+    ended.abort()
+    await jobs
+    await queue.stop(JOB_PATIENCE_MS)
+    await sink?.stop()
+    await close()
+  }
+  stopOnSignal(server, closeAll, logger)
   const { port } = server.address() as AddressInfo
   const host = env.host.includes(':') ? `[${env.host}]` : env.host
   console.log(`listening on http://${host}:${port}`)

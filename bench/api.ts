@@ -9,6 +9,7 @@ import { createApp } from '#api/app'
 import { createLogger } from '#api/logger'
 import { DEFAULT_SIGN_IN_LIMITS } from '#api/middleware/signInLimit'
 import { connect } from '#db/database'
+import { jobQueue } from '#db/queue/jobQueue'
 import { migrate } from '#db/migrate'
 import { readDemoData } from '#db/seed/demoData'
 import { seedDemo } from '#db/seed/seed'
@@ -60,9 +61,11 @@ export async function addApiBenchmarks(bench: Bench): Promise<() => Promise<void
   const { db, close } = connect(cluster.serverUrl, () => undefined)
   const app = createApp({
     db,
+    queue: jobQueue(cluster.serverUrl, () => undefined),
     logger: createLogger('silent'),
     sessionSecret: 'a secret of this measurement, used once'.padEnd(48, '.'),
     publicUrl: null,
+    mailSink: null,
     webRoot: 'dist/web',
     demoSignIns: null,
     requestsPerMinute: 1e9,

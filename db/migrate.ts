@@ -1,12 +1,14 @@
 import { drizzle } from 'drizzle-orm/node-postgres'
 import { migrate as applyMigrations } from 'drizzle-orm/node-postgres/migrator'
 import pg from 'pg'
+import { MIGRATIONS_FOLDER } from './migrationsFolder.ts'
+import { installQueue } from './queue/install.ts'
 
 /** Any number will do, as long as every Emberline migrator takes the same one. */
 const MIGRATION_LOCK = 7_236_001
 
 /**
- * Brings the database at `url` to the newest schema; `url` signs in as its owner.
+ * Brings the database at `url` to the newest schema, the queue's tables with it; `url` signs in as its owner.
  * Several may be started at once: each waits for the one before, then finds nothing left to do.
  */
 export async function migrate(url: string): Promise<void> {
@@ -14,9 +16,8 @@ export async function migrate(url: string): Promise<void> {
   await client.connect()
   try {
     await client.query('select pg_advisory_lock($1)', [MIGRATION_LOCK])
-    await applyMigrations(drizzle(client), {
-      migrationsFolder: process.env['EMBERLINE_MIGRATIONS_DIR'] ?? 'db/migrations',
-    })
+    await applyMigrations(drizzle(client), { migrationsFolder: MIGRATIONS_FOLDER })
+    await installQueue(url)
   } finally {
     await client.end()
   }

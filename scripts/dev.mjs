@@ -1,5 +1,5 @@
 /** `npm run dev`: the database and demo group of `npm start`, with the api and the web app reloading as they change. */
-import { demoSignInLines } from './setup/demoSignIns.mjs'
+import { demoSignInLines, mailPageLines } from './setup/demoSignIns.mjs'
 import { freePortFrom } from './setup/freePort.mjs'
 import { fillDatabase, prepare } from './setup/prepare.mjs'
 import { runProgram } from './setup/program.mjs'
@@ -51,6 +51,12 @@ async function main() {
   const vite = await startVite({ webPort, apiPort })
   announce(vite.address)
   say(`\nEmberline, reloading as you edit, is at ${vite.address}`)
+  for (const line of mailPageLines({
+    address: vite.address,
+    demo: settings.demo,
+    environment: process.env,
+  }))
+    say(line)
   say([...(await demoSignInLines(api.address)), '\nCtrl-C stops everything.'].join('\n'))
   await Promise.race([api.exited, vite.exited])
   if (!isStopping()) throw new Trouble('One of the two servers ended by itself; stopping the rest.')

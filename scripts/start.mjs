@@ -4,7 +4,7 @@
  */
 import { join } from 'node:path'
 import { buildServer, buildWeb } from './setup/build.mjs'
-import { demoSignInLines } from './setup/demoSignIns.mjs'
+import { demoSignInLines, mailPageLines } from './setup/demoSignIns.mjs'
 import { freePortFrom } from './setup/freePort.mjs'
 import { fillDatabase, prepare } from './setup/prepare.mjs'
 import { runProgram } from './setup/program.mjs'
@@ -29,9 +29,10 @@ async function choosePort({ port, host }) {
   return free
 }
 
-async function sayWhere({ address, publicUrl, logFile }) {
+async function sayWhere({ address, publicUrl, logFile, demo }) {
   say(`\nEmberline is ready at ${address}`)
   if (publicUrl) say(`and, for everybody else, at ${publicUrl}`)
+  for (const line of mailPageLines({ address, demo, environment: process.env })) say(line)
   const signIns = await demoSignInLines(address)
   if (signIns.length > 0) say(['\nDemo sign-ins (made-up people):', ...signIns].join('\n'))
   say(`\n${logFile === undefined ? '' : `The server's log is ${logFile}. `}Ctrl-C stops Emberline.`)
@@ -63,7 +64,7 @@ async function main() {
     logFile,
   })
   announce(address)
-  await sayWhere({ address, publicUrl: process.env.EMBERLINE_PUBLIC_URL, logFile })
+  await sayWhere({ address, publicUrl: process.env.EMBERLINE_PUBLIC_URL, logFile, demo: settings.demo })
   await exited
   if (!isStopping())
     throw new Trouble('The server ended by itself; the database is being stopped. See its log above.')

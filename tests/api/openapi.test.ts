@@ -44,7 +44,7 @@ function everyRef(value: unknown): string[] {
   return Object.entries(value).flatMap(([key, inner]) => (key === '$ref' ? [String(inner)] : everyRef(inner)))
 }
 
-const OUTSIDE_V1 = ['get /openapi.json', 'get /{*page}']
+const OUTSIDE_V1 = ['get /openapi.json', 'get /healthz', 'get /readyz', 'get /{*page}']
 
 /** What OpenAPI 3.1 demands of the parts used here. */
 const operationShape = z.object({

@@ -114,7 +114,13 @@ describe('row-level security', () => {
       `select proname, proconfig, has_function_privilege('public', oid, 'execute') as open
        from pg_proc where prosecdef and pronamespace = 'public'::regnamespace order by proname`,
     )
-    expect(rows.map(({ proname }) => proname)).toEqual(['account_for_sign_in', 'use_api_key', 'use_session'])
+    expect(rows.map(({ proname }) => proname)).toEqual([
+      'account_for_sign_in',
+      'newest_migration',
+      'remove_expired',
+      'use_api_key',
+      'use_session',
+    ])
     for (const { proconfig, open } of rows) {
       expect(proconfig).toContainEqual(expect.stringMatching(/^search_path=pg_catalog, public, pg_temp$/))
       expect(open).toBe(false)

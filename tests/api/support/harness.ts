@@ -1,4 +1,5 @@
 import { connect } from '#db/database'
+import { jobQueue } from '#db/queue/jobQueue'
 import { createApp } from '#api/app'
 import type { AppDependencies } from '#api/dependencies'
 import { createLogger } from '#api/logger'
@@ -32,12 +33,15 @@ export async function startHarness(): Promise<Harness> {
   const database = await freshDatabase()
   const owner = await connectOwner(database.ownerUrl)
   const { db, close } = connect(database.serverUrl, () => undefined)
+  const queue = jobQueue(database.serverUrl, () => undefined)
   const appWith = (changed: Partial<AppDependencies>): Express =>
     createApp({
       db,
+      queue,
       logger: createLogger('silent'),
       sessionSecret: SESSION_SECRET,
       publicUrl: null,
+      mailSink: null,
       webRoot: 'no-such-folder',
       demoSignIns: null,
       signInLimits: { perAddress: 100, perAccount: 100 },
