@@ -3,6 +3,7 @@ import { computeAbundance } from './abundance/abundance.ts'
 import { computeHistory } from './history/computeHistory.ts'
 import { solveSteps } from './inverse/solveFor.ts'
 import { attributeSteps } from './sensitivity/computeAttribution.ts'
+import { propagateSteps } from './sensitivity/propagation.ts'
 import { atOnce } from './steps/steps.ts'
 import type { Steps } from './steps/steps.ts'
 
@@ -12,6 +13,7 @@ export const QUESTIONS = {
   abundance: (input) => atOnce(() => computeAbundance(input)),
   solve: solveSteps,
   attribute: attributeSteps,
+  propagate: propagateSteps,
 } satisfies Record<string, (input: unknown) => Steps<unknown>>
 
 export type Question = keyof typeof QUESTIONS

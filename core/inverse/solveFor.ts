@@ -4,18 +4,16 @@
  * the turning point is looked at too, so that two solutions close together are both found.
  */
 import { abundance } from '../abundance/abundance.ts'
-import { buildHistory } from '../history/thermalHistory.ts'
 import { ConvergenceError } from '../numerics/convergence.ts'
 import { brentSearch } from '../numerics/roots/brent.ts'
 import type { Sample } from '../numerics/roots/brent.ts'
 import { complete, part } from '../steps/steps.ts'
 import type { Steps } from '../steps/steps.ts'
-import { abundanceRequest } from '../wire/compute.ts'
+import { VariedInput } from '../variation/variedInput.ts'
 import { InputError, parseInput } from '../wire/fault.ts'
 import { solveRequest } from '../wire/inverse.ts'
 import type { SolveRequest, SolveResult } from '../wire/inverse.ts'
 import { usualBracket } from './brackets.ts'
-import { readPath, substitute } from './substitute.ts'
 
 /** Points of the scan per decade, and at least. */
 const PER_DECADE = 8
@@ -39,14 +37,15 @@ function excessOf(request: SolveRequest): {
   complaint: () => Error | null
   refused: () => number
 } {
-  const path = readPath(request.solveFor)
-  const inputs = { history: request.history, candidate: request.candidate }
+  const varied = new VariedInput({ history: request.history, candidate: request.candidate }, [
+    request.solveFor,
+  ])
   let complaint: Error | null = null
   let refused = 0
   const excess = (lnValue: number): number => {
     try {
-      const { history, candidate } = parseInput(abundanceRequest, substitute(inputs, path, Math.exp(lnValue)))
-      return Math.log(abundance(buildHistory(history), candidate).omegaH2 / request.targetOmegaH2)
+      const { history, candidate } = varied.at([Math.exp(lnValue)])
+      return Math.log(abundance(history, candidate).omegaH2 / request.targetOmegaH2)
     } catch (error) {
       if (!(error instanceof InputError || error instanceof ConvergenceError)) throw error
       complaint ??= error

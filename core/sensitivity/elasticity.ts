@@ -4,14 +4,13 @@
  * quotient, is the stated error. Where a bath of steps makes Ωh² kink, that error says so.
  */
 import { abundance } from '../abundance/abundance.ts'
-import { buildHistory } from '../history/thermalHistory.ts'
-import { readPath, substitute } from '../inverse/substitute.ts'
 import { ConvergenceError } from '../numerics/convergence.ts'
-import { abundanceRequest } from '../wire/compute.ts'
 import type { AbundanceRequest } from '../wire/compute.ts'
 import { complete, part } from '../steps/steps.ts'
 import type { Steps } from '../steps/steps.ts'
-import { InputError, parseInput } from '../wire/fault.ts'
+import { readPath, valueAt } from '../variation/jsonPath.ts'
+import { VariedInput } from '../variation/variedInput.ts'
+import { InputError } from '../wire/fault.ts'
 
 export interface Elasticity {
   path: string
@@ -42,10 +41,6 @@ export function continuousPaths(value: unknown, path = ''): string[] {
   )
 }
 
-function valueAt(value: unknown, path: readonly (string | number)[]): number {
-  return path.reduce<unknown>((each, key) => (each as Record<string | number, unknown>)[key], value) as number
-}
-
 /** Moves, in steps, at which both differences together want ln Ωh². */
 const MOVES = [...new Set(WEIGHTS.flatMap((_weight, i) => [i + 1, 2 * (i + 1)]))].flatMap((k) => [k, -k])
 
@@ -61,14 +56,13 @@ function derivative(lnOmegaAt: ReadonlyMap<number, number>, spacing: number): nu
 export const EVALUATIONS = MOVES.length
 
 function* elasticitySteps(request: AbundanceRequest, path: string): Steps<Elasticity> {
-  const keys = readPath(path)
-  const start = valueAt(request, keys)
+  const start = valueAt(request, readPath(path)) as number
+  const varied = new VariedInput(request, [path])
   const lnOmegaAt = new Map<number, number>()
   try {
     for (const move of MOVES) {
-      const moved = substitute(request, keys, start * (1 + move * STEP))
-      const { history, candidate } = parseInput(abundanceRequest, moved)
-      lnOmegaAt.set(move, Math.log(abundance(buildHistory(history), candidate).omegaH2))
+      const { history, candidate } = varied.at([start * (1 + move * STEP)])
+      lnOmegaAt.set(move, Math.log(abundance(history, candidate).omegaH2))
       yield { done: lnOmegaAt.size, of: EVALUATIONS }
     }
   } catch (error) {

@@ -1,7 +1,6 @@
 import { readFileSync } from 'node:fs'
 import { describe, expect, it } from 'vitest'
 import { computeAbundance, computeSolve } from '#core/index'
-import { readPath, substitute } from '#core/inverse/substitute'
 import { InputError } from '#core/wire/index'
 import { relative } from '../fixtures.ts'
 
@@ -75,12 +74,5 @@ describe('the inverse question', () => {
     expect(() => computeSolve({ history: {}, candidate: wimp, solveFor: 'candidate.colour' })).toThrow(
       'candidate.colour: not a name known here',
     )
-  })
-
-  it('puts a number anywhere and changes nothing else', () => {
-    const value = { a: [{ b: 1 }, { b: 2, c: 3 }] }
-    expect(substitute(value, readPath('a[1].b'), 7)).toEqual({ a: [{ b: 1 }, { b: 7, c: 3 }] })
-    expect(value).toEqual({ a: [{ b: 1 }, { b: 2, c: 3 }] })
-    expect(substitute({}, readPath('x.y'), 1)).toEqual({ x: { y: 1 } })
   })
 })
