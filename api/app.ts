@@ -19,6 +19,11 @@ export function createApp(dependencies: AppDependencies): Express {
   app.set('trust proxy', 'loopback')
   app.use(requestId, requestLog(dependencies.logger))
   app.use(securityHeaders(dependencies.publicUrl?.protocol === 'https:'))
+  // What a group keeps here is nobody's to index, a guest's page least of all.
+  app.use((_req, res, next) => {
+    res.setHeader('x-robots-tag', 'noindex, nofollow')
+    next()
+  })
   app.use(compression())
   app.use('/api', apiRoutes(dependencies))
   app.use(operationRoutes(dependencies.db, dependencies.queue.isRunning))

@@ -16,6 +16,8 @@ const MAY = {
   compute: { roles: EVERYONE, scope: 'compute' },
   'save-revision': { roles: WRITERS, scope: 'write' },
   'save-evaluation': { roles: WRITERS, scope: 'write' },
+  'guest-links': { roles: WRITERS, scope: 'write' },
+  'all-guest-links': { roles: LEADS, scope: 'write' },
   'own-keys': { roles: EVERYONE, scope: null },
   'all-keys': { roles: LEADS, scope: null },
   'read-audit-log': { roles: LEADS, scope: 'read' },

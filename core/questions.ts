@@ -1,5 +1,6 @@
 /** What can be asked of the core, by its name on the wire: from an input as it came to the steps that answer it. */
 import { computeAbundance } from './abundance/abundance.ts'
+import { checkEvidence } from './evidence/evidence.ts'
 import { computeHistory } from './history/computeHistory.ts'
 import { solveSteps } from './inverse/solveFor.ts'
 import { attributeSteps } from './sensitivity/computeAttribution.ts'
@@ -11,6 +12,7 @@ import type { Steps } from './steps/steps.ts'
 export const QUESTIONS = {
   history: (input) => atOnce(() => computeHistory(input)),
   abundance: (input) => atOnce(() => computeAbundance(input)),
+  evidence: (input) => atOnce(() => checkEvidence(input)),
   solve: solveSteps,
   attribute: attributeSteps,
   propagate: propagateSteps,

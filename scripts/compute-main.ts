@@ -3,6 +3,7 @@ import { createInterface } from 'node:readline'
 import { text } from 'node:stream/consumers'
 import {
   ConvergenceError,
+  checkEvidence,
   computeAbundance,
   computeAttribution,
   computeHistory,
@@ -15,6 +16,7 @@ const QUESTIONS: Record<string, (input: unknown) => unknown> = {
   abundance: computeAbundance,
   solve: computeSolve,
   attribute: computeAttribution,
+  evidence: checkEvidence,
 }
 
 const USAGE = `usage: npm run --silent compute -- ${Object.keys(QUESTIONS).join('|')} [--lines] < input.json > output.json

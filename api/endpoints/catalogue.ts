@@ -1,7 +1,18 @@
 import { listAuditEndpoint } from './audit.ts'
 import { computeAbundanceEndpoint, computeHistoryEndpoint } from './compute.ts'
 import type { Endpoint } from './endpoint.ts'
-import { createEvaluationEndpoint, listEvaluationsEndpoint, readEvaluationEndpoint } from './evaluations.ts'
+import {
+  createEvaluationEndpoint,
+  listEvaluationsEndpoint,
+  readEvaluationEndpoint,
+  readEvidenceEndpoint,
+} from './evaluations.ts'
+import {
+  createGuestLinkEndpoint,
+  listGuestLinksEndpoint,
+  openGuestLinkEndpoint,
+  revokeGuestLinkEndpoint,
+} from './guestLinks.ts'
 import { healthEndpoint, infoEndpoint } from './info.ts'
 import { createKeyEndpoint, listKeysEndpoint, revokeKeyEndpoint } from './keys.ts'
 import { candidateEndpoints, historyEndpoints } from './records.ts'
@@ -18,6 +29,7 @@ export const CATALOGUE: readonly Endpoint[] = [
   ...Object.values(candidateEndpoints),
   listEvaluationsEndpoint,
   readEvaluationEndpoint,
+  readEvidenceEndpoint,
   createEvaluationEndpoint,
   computeHistoryEndpoint,
   computeAbundanceEndpoint,
@@ -25,4 +37,8 @@ export const CATALOGUE: readonly Endpoint[] = [
   createKeyEndpoint,
   revokeKeyEndpoint,
   listAuditEndpoint,
+  listGuestLinksEndpoint,
+  createGuestLinkEndpoint,
+  revokeGuestLinkEndpoint,
+  openGuestLinkEndpoint,
 ]

@@ -3,6 +3,7 @@ import {
   createEvaluationResult,
   evaluation,
   evaluationQuery,
+  evidenceBundle,
   pageOf,
 } from '#core/wire/index'
 import { endpoint } from './endpoint.ts'
@@ -48,4 +49,17 @@ export const createEvaluationEndpoint = endpoint({
   answer: createEvaluationResult,
   answerIs: 'The stored evaluation, and how far it lies from what the browser had shown',
   problems: ['not-found', 'no-convergence'],
+})
+
+export const readEvidenceEndpoint = endpoint({
+  id: 'readEvidence',
+  method: 'get',
+  path: '/evaluations/{id}/evidence',
+  tag,
+  summary: 'The evidence bundle of an evaluation: inputs, result, digests, and the command that repeats it',
+  may: 'read',
+  params: byId,
+  status: 200,
+  answer: evidenceBundle,
+  answerIs: 'One file that can be repeated and checked without the group',
 })

@@ -8,6 +8,7 @@ export const PROBLEMS = {
   'key-scope': { status: 403, title: 'The API key does not reach this far' },
   'other-site': { status: 403, title: 'The request came from another site' },
   'not-found': { status: 404, title: 'There is nothing here' },
+  'guest-link-closed': { status: 404, title: 'This link opens nothing' },
   'stale-parent': { status: 409, title: 'A newer revision was saved meanwhile' },
   'too-large': { status: 413, title: 'The body of the request is too large' },
   'not-json': { status: 415, title: 'The body of the request must be JSON' },

@@ -1,4 +1,4 @@
-import { CORE_VERSION, computeAbundance, computeHistory } from '#core/index'
+import { CORE_VERSION, computeAbundance, computeHistory, evidenceOf } from '#core/index'
 import { abundanceRequest, digestOf, parseInput } from '#core/wire/index'
 import type { CandidateInput, HistoryInput } from '#core/wire/index'
 
@@ -16,6 +16,7 @@ const IDS = {
   candidate: 'd5f7b9c1-2e40-4638-8d9f-8b7c6d5e4f30',
   candidateRevision: 'e608cad2-3f51-4749-9ea0-9c8d7e6f5041',
   nextRevision: '08a1b2c3-4d5e-4f60-8a7b-9c8d7e6f5a4b',
+  guestLink: '3bd4e5f6-7081-4293-8dae-2f3a4b5c6d7e',
   key: '19b2c3d4-5e6f-4071-8b9c-0d1e2f3a4b5c',
   auditEntry: '2ac3d4e5-6f70-4182-9cad-1e2f3a4b5c6d',
   evaluation: 'f719dbe3-4062-485a-8fb1-ad9e8f706152',
@@ -58,6 +59,27 @@ const keyExamples: Record<string, EndpointExample> = {
     answer: { key, secret: 'ember_Qm4x…, 49 characters' },
   },
   revokeKey: { answer: { ...key, revokedAt: '2026-10-02T08:00:00.000Z' } },
+}
+
+const guestLink = {
+  id: IDS.guestLink,
+  kind: 'evaluation',
+  subjectId: IDS.evaluation,
+  note: 'For the referee',
+  createdBy: person,
+  createdAt: AT,
+  expiresAt: null,
+  lastUsedAt: null,
+  revokedAt: null,
+}
+
+const guestLinkExamples: Record<string, EndpointExample> = {
+  listGuestLinks: { answer: { items: [guestLink] } },
+  createGuestLink: {
+    body: { kind: 'evaluation', subjectId: IDS.evaluation, note: guestLink.note, days: null },
+    answer: { link: guestLink, token: 'Yk3v…, 43 characters' },
+  },
+  revokeGuestLink: { answer: { ...guestLink, revokedAt: '2026-10-02T08:00:00.000Z' } },
 }
 
 const auditExample = {
@@ -137,6 +159,19 @@ function evaluationExamples(
         shown: { relativeDifference: 0, allowed: Math.max(1e-9, result.numericalError), agrees: true },
       },
     },
+    readEvidence: { answer: evidenceOf(evaluation, { history, candidate }, session.group.name) },
+    openGuestLink: {
+      body: { token: 'Yk3v…, 43 characters' },
+      answer: {
+        kind: 'evaluation',
+        groupName: session.group.name,
+        expiresAt: null,
+        evaluation,
+        history,
+        candidate,
+        evidence: evidenceOf(evaluation, { history, candidate }, session.group.name),
+      },
+    },
     computeAbundance: { body: { history: historyWritten, candidate: candidateWritten }, answer: result },
   }
 }
@@ -164,6 +199,7 @@ export function examples(): Record<string, EndpointExample> {
     ),
     ...evaluationExamples(history, candidate),
     ...keyExamples,
+    ...guestLinkExamples,
     listAuditEntries: { answer: { items: [auditExample], next: null } },
     computeHistory: { body: rowsAsked, answer: computeHistory(rowsAsked) },
   }

@@ -5,12 +5,13 @@ import type { AppDependencies } from '../dependencies.ts'
 import { notFound } from '../errors/problemError.ts'
 import { sameOrigin } from '../middleware/sameOrigin.ts'
 import { findCaller } from '../middleware/caller.ts'
-import { requestLimit } from '../middleware/requestLimit.ts'
+import { GUEST_OPENINGS_PER_MINUTE, addressLimit, requestLimit } from '../middleware/requestLimit.ts'
 import { sessionCookie } from '../middleware/sessionCookie.ts'
 import { signInLimit } from '../middleware/signInLimit.ts'
 import { apiDocument } from '../openapi/document.ts'
 import { auditService } from '../services/audit.ts'
 import { evaluationService } from '../services/evaluations.ts'
+import { guestLinkService } from '../services/guestLinks.ts'
 import { keyService } from '../services/keys.ts'
 import { candidateService, historyService } from '../services/records.ts'
 import { sessionService } from '../services/sessions.ts'
@@ -19,6 +20,7 @@ import { auditRoutes } from './audit.ts'
 import { candidateRoutes } from './candidates.ts'
 import { computeRoutes } from './compute.ts'
 import { evaluationRoutes } from './evaluations.ts'
+import { guestLinkRoutes } from './guestLinks.ts'
 import { historyRoutes } from './histories.ts'
 import { infoRoutes } from './info.ts'
 import { keyRoutes } from './keys.ts'
@@ -41,6 +43,7 @@ export function apiRoutes(dependencies: AppDependencies): Router {
   evaluationRoutes(v1, evaluationService(db))
   computeRoutes(v1)
   keyRoutes(v1, keys)
+  guestLinkRoutes(v1, guestLinkService(db), addressLimit(GUEST_OPENINGS_PER_MINUTE))
   auditRoutes(v1, auditService(db))
 
   const api = express.Router()

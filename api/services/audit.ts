@@ -15,6 +15,8 @@ export type AuditAction =
   | 'evaluation.create'
   | 'key.create'
   | 'key.revoke'
+  | 'guest-link.create'
+  | 'guest-link.revoke'
   | 'session.open'
   | 'session.close'
 

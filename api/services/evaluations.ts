@@ -1,8 +1,8 @@
-import { CORE_VERSION, computeAbundance } from '#core/index'
+import { CORE_VERSION, LEAST_ALLOWED_DIFFERENCE, computeAbundance, evidenceOf } from '#core/index'
 import { digestOf } from '#core/wire/index'
-import type { AbundanceResult, CreateEvaluationResult, Evaluation } from '#core/wire/index'
+import type { AbundanceResult, CreateEvaluationResult, Evaluation, EvidenceBundle } from '#core/wire/index'
 import { withGroup } from '#db/database'
-import type { Database } from '#db/database'
+import type { Database, GroupTransaction } from '#db/database'
 import { candidateQueries } from '#db/queries/candidates'
 import { findEvaluation, insertEvaluation, listEvaluations } from '#db/queries/evaluations'
 import type { EvaluationFilter, StoredEvaluation } from '#db/queries/evaluations'
@@ -11,9 +11,6 @@ import { notFound } from '../errors/problemError.ts'
 import type { Caller } from '../middleware/caller.ts'
 import { audit } from './audit.ts'
 import { pageAnswer, pageRequest } from './cursor.ts'
-
-/** Two machines may round differently below this, relative, however exact the method claims to be. */
-const LEAST_ALLOWED_DIFFERENCE = 1e-9
 
 const writeEvaluation = (stored: StoredEvaluation): Evaluation => ({
   ...stored,
@@ -29,6 +26,22 @@ export function compareShown(
   const relativeDifference = Math.abs(shownOmegaH2 - omegaH2) / omegaH2
   const allowed = Math.max(LEAST_ALLOWED_DIFFERENCE, numericalError)
   return { relativeDifference, allowed, agrees: relativeDifference <= allowed }
+}
+
+/** An evaluation with both its inputs; revisions outlive everything, so they are there. */
+export async function readWithInputs(
+  tx: GroupTransaction,
+  id: string,
+): Promise<{ evaluation: Evaluation; input: EvidenceBundle['input'] }> {
+  const stored = await findEvaluation(tx, id)
+  if (stored === null) throw notFound('evaluation')
+  const history = await historyQueries.findRevision(tx, stored.history.id)
+  const candidate = await candidateQueries.findRevision(tx, stored.candidate.id)
+  if (history === null || candidate === null) throw new Error(`evaluation ${id} has lost a revision`)
+  return {
+    evaluation: writeEvaluation(stored),
+    input: { history: history.input, candidate: candidate.input },
+  }
 }
 
 interface EvaluationRequest {
@@ -58,6 +71,12 @@ export function evaluationService(db: Database) {
 
   return {
     read,
+
+    evidence: (caller: Caller, id: string): Promise<EvidenceBundle> =>
+      withGroup(db, caller.group.id, async (tx) => {
+        const { evaluation, input } = await readWithInputs(tx, id)
+        return evidenceOf(evaluation, input, caller.group.name)
+      }),
 
     async list(caller: Caller, query: ListRequest) {
       const request = pageRequest(query)

@@ -49,6 +49,18 @@ describe('another group’s data', () => {
     expect(log.text).not.toContain(harness.birch.id)
   })
 
+  it('cannot be shown to guests, nor their links seen or ended', async () => {
+    for (const [kind, subjectId] of [
+      ['evaluation', theirs.evaluationId],
+      ['history-revision', theirs.history.revisionId],
+    ])
+      expectProblem(await lead.post('/api/v1/guest-links').send({ kind, subjectId }), 'not-found')
+    const links = await lead.get(`/api/v1/guest-links?subjectId=${theirs.evaluationId}`)
+    expect(links.body).toEqual({ items: [] })
+    expectProblem(await lead.delete(`/api/v1/guest-links/${theirs.guestLinkId}`), 'not-found')
+    expectProblem(await lead.get(`/api/v1/evaluations/${theirs.evaluationId}/evidence`), 'not-found')
+  })
+
   it('cannot be revised', async () => {
     const history2 = { parentId: theirs.history.revisionId, input: history }
     const candidate2 = { parentId: theirs.candidate.revisionId, input: candidate }

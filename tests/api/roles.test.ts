@@ -17,7 +17,15 @@ beforeAll(async () => {
 afterAll(() => harness.stop())
 
 /** Written out rather than read from api/permissions.ts: this is the promise that file has to keep. */
-const WRITES = ['createHistory', 'reviseHistory', 'createCandidate', 'reviseCandidate', 'createEvaluation']
+const WRITES = [
+  'createHistory',
+  'reviseHistory',
+  'createCandidate',
+  'reviseCandidate',
+  'createEvaluation',
+  'createGuestLink',
+  'revokeGuestLink',
+]
 
 const FOR_LEADS = ['listAuditEntries']
 

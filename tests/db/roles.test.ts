@@ -21,6 +21,7 @@ const TENANT_TABLES = [
   'candidates',
   'evaluations',
   'groups',
+  'guest_links',
   'histories',
   'history_revisions',
   'memberships',
@@ -74,6 +75,7 @@ describe('the server’s role', () => {
       'api_keys.revoked_at',
       'candidates.latest_number',
       'candidates.updated_at',
+      'guest_links.revoked_at',
       'histories.latest_number',
       'histories.updated_at',
       'sessions.revoked_at',
@@ -86,6 +88,7 @@ describe('the server’s role', () => {
 
   it('cannot read the hash of a key’s secret, nor give a key a rate of its own', async () => {
     await expect(server.query('select secret_hash from api_keys')).rejects.toThrow('permission denied')
+    await expect(server.query('select token_hash from guest_links')).rejects.toThrow('permission denied')
     await expect(server.query('update api_keys set requests_per_minute = 1')).rejects.toThrow(
       'permission denied',
     )
@@ -119,6 +122,7 @@ describe('row-level security', () => {
       'newest_migration',
       'remove_expired',
       'use_api_key',
+      'use_guest_link',
       'use_session',
     ])
     for (const { proconfig, open } of rows) {

@@ -46,6 +46,7 @@ const TABLES: [table: string, group: string, columns: string, each: number][] = 
   ['candidate_revisions', 'group_id', '*', 1],
   ['evaluations', 'group_id', '*', 1],
   ['api_keys', 'group_id', 'id, user_id, name', 1],
+  ['guest_links', 'group_id', 'id, created_by, subject_id', 1],
   ['audit_entries', 'group_id', '*', 1],
   ['users', 'id', 'id, name, email', 3],
 ]
@@ -136,6 +137,21 @@ describe('writing into another group', () => {
         ],
       ),
     ).rejects.toThrow('evaluations_history_revision_fk')
+  })
+
+  it('is refused for a guest link to their evaluation or their revision', async () => {
+    await setGroup(server, ours.id)
+    for (const [kind, subject] of [
+      ['evaluation', theirSaved.evaluationId],
+      ['history-revision', theirSaved.history.revisionId],
+    ])
+      await expect(
+        server.query(
+          `insert into guest_links (group_id, kind, subject_id, note, token_hash, created_by)
+           values ($1, $2, $3, '', repeat('0', 64), $4)`,
+          [ours.id, kind, subject, ours.lead.id],
+        ),
+      ).rejects.toThrow('guest_links_subject')
   })
 
   it('is refused for an author who is no member', async () => {

@@ -16,6 +16,7 @@ export const addressOf = (endpoint: Endpoint, id = ''): string =>
 
 function recordOf(endpoint: Endpoint, saved: Saved): { id: string; revisionId?: string } {
   if (endpoint.tag === 'keys') return { id: saved.keyId }
+  if (endpoint.tag === 'guest-links') return { id: saved.guestLinkId }
   if (endpoint.tag === 'evaluations') return { id: saved.evaluationId }
   const { recordId, revisionId } = endpoint.tag === 'histories' ? saved.history : saved.candidate
   return { id: recordId, revisionId }
@@ -31,6 +32,7 @@ export function callByExample(agent: TestAgent, endpoint: Endpoint, saved: Saved
     parentId: revisionId,
     historyRevisionId: saved.history.revisionId,
     candidateRevisionId: saved.candidate.revisionId,
+    subjectId: saved.evaluationId,
   }
   const real = Object.entries(body as object).map(([key, value]) => [key, ids[key] ?? value] as const)
   return call.send(Object.fromEntries(real))

@@ -4,6 +4,7 @@ import { candidateInput, digestOf, historyInput } from '#core/wire/index'
 import { connect, withGroup } from '#db/database'
 import { candidateQueries } from '#db/queries/candidates'
 import { insertEvaluation } from '#db/queries/evaluations'
+import { insertGuestLink } from '#db/queries/guestLinks'
 import { historyQueries } from '#db/queries/histories'
 import { insertKey } from '#db/queries/apiKeys'
 import type { GroupTransaction } from '#db/database'
@@ -57,7 +58,7 @@ async function saveKey(tx: GroupTransaction, group: TestGroup, holder: Member): 
   return id
 }
 
-/** Stores a history, a candidate and an evaluation of the two, through the server's own role and queries. */
+/** Stores a history, a candidate and an evaluation of the two, a key and a guest link, through the server's own role and queries. */
 export async function saveOneOfEach(serverUrl: string, group: TestGroup, keyHolder = group.reader) {
   const { db, close } = connect(serverUrl, () => undefined)
   const input = { history, candidate }
@@ -84,7 +85,16 @@ export async function saveOneOfEach(serverUrl: string, group: TestGroup, keyHold
         result: computeAbundance(input),
       })
       const keyId = await saveKey(tx, group, keyHolder)
-      return { history: savedHistory, candidate: savedCandidate, evaluationId, keyId }
+      const guestLinkId = await insertGuestLink(tx, {
+        groupId: group.id,
+        kind: 'evaluation',
+        subjectId: evaluationId,
+        note: 'set by a test',
+        tokenHash: randomBytes(32).toString('hex'),
+        createdBy: (keyHolder.role === 'reader' ? author : keyHolder).id,
+        expiresAt: null,
+      })
+      return { history: savedHistory, candidate: savedCandidate, evaluationId, keyId, guestLinkId }
     })
   } finally {
     await close()

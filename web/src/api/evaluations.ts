@@ -1,5 +1,5 @@
 import { infiniteQueryOptions, queryOptions } from '@tanstack/react-query'
-import type { CreateEvaluationResult, Evaluation } from '#core/wire/index'
+import type { CreateEvaluationResult, Evaluation, EvidenceBundle } from '#core/wire/index'
 import { api } from '../lib/api.ts'
 
 interface EvaluationPage {
@@ -27,6 +27,13 @@ export const evaluationQuery = (id: string) =>
   queryOptions({
     queryKey: ['evaluations', 'one', id],
     queryFn: () => api<Evaluation>('GET', `/evaluations/${id}`),
+  })
+
+export const evidenceQuery = (id: string) =>
+  queryOptions({
+    queryKey: ['evaluations', 'evidence', id],
+    queryFn: () => api<EvidenceBundle>('GET', `/evaluations/${id}/evidence`),
+    staleTime: Infinity,
   })
 
 export const createEvaluation = (

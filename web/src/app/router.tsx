@@ -27,6 +27,7 @@ const page = (path: string, load: () => Promise<PageModule>): RouteObject => ({
 
 export const router = createBrowserRouter([
   { ...page('/sign-in', () => import('../features/session/SignInPage.tsx')), HydrateFallback: Loading },
+  { ...page('/guest', () => import('../features/guest/GuestPage.tsx')), HydrateFallback: Loading },
   {
     path: '/',
     Component: Shell,

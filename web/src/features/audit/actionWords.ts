@@ -7,6 +7,8 @@ const ACTIONS: Record<string, string> = {
   'evaluation.create': 'stored an evaluation',
   'key.create': 'made an API key',
   'key.revoke': 'revoked an API key',
+  'guest-link.create': 'made a guest link',
+  'guest-link.revoke': 'revoked a guest link',
   'session.open': 'signed in',
   'session.close': 'signed out',
 }
@@ -20,5 +22,6 @@ export const KINDS = [
   { value: 'candidate', label: 'candidates' },
   { value: 'evaluation', label: 'evaluations' },
   { value: 'key', label: 'API keys' },
+  { value: 'guest-link', label: 'guest links' },
   { value: 'session', label: 'signing in and out' },
 ] as const

@@ -1,9 +1,11 @@
 import { useQuery } from '@tanstack/react-query'
 import type { CandidateInput, Evaluation, HistoryInput } from '#core/wire/index'
+import { evidenceQuery } from '../../api/evaluations.ts'
 import { candidateQuery, historyQuery } from '../../api/records.ts'
 import { CandidateInputs, HistoryInputs } from '../records/Inputs.tsx'
 import { Loaded } from '../records/Loaded.tsx'
 import { Section } from '../records/Section.tsx'
+import { EvidenceFile } from './EvidenceFile.tsx'
 import { RecomputeHere } from './RecomputeHere.tsx'
 
 interface Inputs {
@@ -40,7 +42,10 @@ export function EvaluatedInputs({ evaluation }: { evaluation: Evaluation }) {
     <Loaded of={inputs} what="what went in">
       {({ history, candidate }) => (
         <>
-          <RecomputeHere request={{ history, candidate }} stored={evaluation.result} />
+          <div className="flex flex-wrap items-start gap-3">
+            <RecomputeHere request={{ history, candidate }} stored={evaluation.result} />
+            <StoredEvidence evaluation={evaluation} />
+          </div>
           <div className="grid grid-cols-[minmax(0,1fr)] gap-x-12 gap-y-7 lg:grid-cols-2">
             <Section title="History">
               <HistoryInputs input={history} root="history." />
@@ -53,4 +58,9 @@ export function EvaluatedInputs({ evaluation }: { evaluation: Evaluation }) {
       )}
     </Loaded>
   )
+}
+
+function StoredEvidence({ evaluation }: { evaluation: Evaluation }) {
+  const evidence = useQuery(evidenceQuery(evaluation.id))
+  return evidence.data === undefined ? null : <EvidenceFile bundle={evidence.data} />
 }

@@ -3,8 +3,8 @@ import { Link, useParams } from 'react-router-dom'
 import type { Evaluation } from '#core/wire/index'
 import { evaluationQuery } from '../../api/evaluations.ts'
 import { numberParts } from '../../lib/number.ts'
+import { GuestLinks } from '../guest/GuestLinks.tsx'
 import { benchLink } from '../records/benchLink.ts'
-import { CopyDigest } from '../records/CopyDigest.tsx'
 import { Loaded } from '../records/Loaded.tsx'
 import { Moment } from '../records/Moment.tsx'
 import { Page } from '../records/Page.tsx'
@@ -12,6 +12,7 @@ import { QUIET_LINK } from '../records/quietLink.ts'
 import { Section } from '../records/Section.tsx'
 import { revisionText } from './evaluationColumns.tsx'
 import { EvaluatedInputs } from './EvaluatedInputs.tsx'
+import { KeptWith } from './KeptWith.tsx'
 import { Outputs, StoredAnswer, StoredGuards } from './Outcome.tsx'
 
 function titleOf({ result, history, candidate }: Evaluation): string {
@@ -48,14 +49,10 @@ function EvaluationDetail({ evaluation }: { evaluation: Evaluation }) {
             <StoredGuards guards={result.guards} />
           </Section>
           <Section title="Kept with it">
-            <dl className="grid grid-cols-[auto_minmax(0,1fr)] gap-x-5 gap-y-1 text-small [&>dt]:text-soft">
-              <dt>Core version</dt>
-              <dd className="number">{evaluation.coreVersion}</dd>
-              <dt>Digest of the inputs</dt>
-              <dd>
-                <CopyDigest digest={evaluation.inputDigest} />
-              </dd>
-            </dl>
+            <KeptWith evaluation={evaluation} />
+          </Section>
+          <Section title="Guest links">
+            <GuestLinks kind="evaluation" subjectId={evaluation.id} what="this evaluation" />
           </Section>
         </div>
       </div>

@@ -20,12 +20,14 @@ interface RecordPageProps<R extends HistoryRecord | CandidateRecord> {
   benchLinkOf: (number: number) => string
   inputTitle: string
   wordings: (input: R['head']['input']) => Wording[]
+  /** What stands beside the revisions, about the one that is shown. */
+  beside?: (shown: R['head']) => ReactNode
   children: (input: R['head']['input']) => ReactNode
 }
 
 /** A history or a candidate: its revisions, what one of them says, what changed, and what was computed with it. */
 export function RecordPage<R extends HistoryRecord | CandidateRecord>(props: RecordPageProps<R>) {
-  const { record, list, uses, benchLinkOf, inputTitle, wordings, children } = props
+  const { record, list, uses, benchLinkOf, inputTitle, wordings, beside, children } = props
   const { data: session } = useQuery(sessionQuery)
   const [search] = useSearchParams()
   const wanted = Number(search.get('revision'))
@@ -45,14 +47,17 @@ export function RecordPage<R extends HistoryRecord | CandidateRecord>(props: Rec
       </header>
       <div className="grid grid-cols-[minmax(0,1fr)] gap-x-12 gap-y-7 lg:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
         <Section title={`${inputTitle} of revision ${shown.number}`}>{children(shown.input)}</Section>
-        <Section title="Revisions">
-          <RevisionList
-            revisions={record.revisions}
-            shown={shown.number}
-            baselineId={session?.group.baselineRevisionId ?? null}
-            benchLinkOf={benchLinkOf}
-          />
-        </Section>
+        <div className="grid grid-cols-[minmax(0,1fr)] content-start gap-7">
+          <Section title="Revisions">
+            <RevisionList
+              revisions={record.revisions}
+              shown={shown.number}
+              baselineId={session?.group.baselineRevisionId ?? null}
+              benchLinkOf={benchLinkOf}
+            />
+          </Section>
+          {beside?.(shown)}
+        </div>
       </div>
       <Section title="What changed">
         <CompareRevisions<R['head']['input']> revisions={record.revisions} wordings={wordings} />
