@@ -4,6 +4,7 @@ import { checkEvidence } from './evidence/evidence.ts'
 import { computeHistory } from './history/computeHistory.ts'
 import { solveSteps } from './inverse/solveFor.ts'
 import { attributeSteps } from './sensitivity/computeAttribution.ts'
+import { laboratorySteps } from './laboratory/laboratory.ts'
 import { propagateSteps } from './sensitivity/propagation.ts'
 import { atOnce } from './steps/steps.ts'
 import type { Steps } from './steps/steps.ts'
@@ -16,6 +17,7 @@ export const QUESTIONS = {
   solve: solveSteps,
   attribute: attributeSteps,
   propagate: propagateSteps,
+  laboratory: laboratorySteps,
 } satisfies Record<string, (input: unknown) => Steps<unknown>>
 
 export type Question = keyof typeof QUESTIONS

@@ -36,9 +36,12 @@ export function placedValue(distribution: DistributionInput, drawn: number): unk
   return distribution.kind === 'discrete' ? distribution.values[drawn] : drawn
 }
 
-/** Each number at its median, each choice at its first value. */
+/** Each number at its median or the value quoted with two errors, each choice at its first value. */
 export function centralValues(distributions: readonly DistributionInput[]): unknown[] {
-  return distributions.map((each) => (each.kind === 'discrete' ? each.values[0] : quantileOf(each, 0.5)))
+  return distributions.map((each) => {
+    if (each.kind === 'discrete') return each.values[0]
+    return each.kind === 'two-piece-normal' ? each.value : quantileOf(each, 0.5)
+  })
 }
 
 /** Field of a distribution that its central value comes from. */

@@ -15,23 +15,44 @@ export const solveRequest = z
       .describe('Path of the unknown'),
     targetOmegaH2: positive.default(0.12).describe('Abundance to reach'),
     between: z
-      .tuple([positive, positive])
+      .tuple([z.number(), z.number()])
       .refine(([low, high]) => low < high, { message: 'allowed: [low, high] with low below high' })
       .optional()
-      .describe('Where to look; by default far on both sides of what is usual for that number'),
+      .describe(
+        'Where to look; by default far on both sides of what is usual for that number. Scanned evenly in the logarithm, or in the number itself when it begins at zero or below',
+      ),
   })
   .meta({ id: 'SolveRequest' })
 export type SolveRequest = z.output<typeof solveRequest>
 
+const reached = z.object({
+  value: z.number().describe('Value of the unknown'),
+  omegaH2: z.number().describe('The abundance it gives'),
+})
+
 export const solveResult = z
   .object({
     solutions: z.array(z.number()).describe('All values found in the bracket, ascending'),
-    searched: z.tuple([z.number(), z.number()]),
-    targetOmegaH2: z.number(),
-    closest: z
-      .object({ value: z.number(), omegaH2: z.number() })
+    searched: z.tuple([z.number(), z.number()]).describe('The bracket'),
+    targetOmegaH2: z.number().describe('The abundance asked for'),
+    closest: reached
       .nullable()
       .describe('Where the abundance came nearest to the target; null when a solution was found'),
+    lowest: reached.describe('The smallest abundance seen in the bracket'),
+    highest: reached.describe('The largest abundance seen in the bracket'),
+    leaps: z
+      .array(z.number())
+      .describe('Where the abundance leaps over the target without reaching it, as at a step of the bath'),
+    gaps: z
+      .array(
+        z.object({
+          from: z.number(),
+          to: z.number(),
+          message: z.string().describe('Why, by the first value in it'),
+        }),
+      )
+      .describe('Stretches of the bracket whose values give no abundance'),
+    explanation: z.string().nullable().describe('Why there is no solution, in words; null when there is one'),
     notComputable: z
       .number()
       .int()

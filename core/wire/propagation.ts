@@ -207,7 +207,9 @@ export const propagateResult = z
   .object({
     central: z
       .object({ omegaH2: z.number(), numericalError: z.number() })
-      .describe('With every number at its median and every choice at its first value'),
+      .describe(
+        'With every number at its median (a two-piece normal one at its quoted value), every choice at its first value',
+      ),
     ...sampledAbundance,
     rankCorrelations: z
       .array(
