@@ -7,6 +7,7 @@ import type { AbundanceResult } from '../wire/compute.ts'
 import { InputError, parseInput } from '../wire/fault.ts'
 import { maximumTemperatureFault } from '../wire/history.ts'
 import { ConvergenceError } from '../numerics/convergence.ts'
+import { bathTableGuards, decisiveTemperatures } from './guards/tableGuards.ts'
 import { mechanismOf } from './mechanisms/mechanisms.ts'
 
 /** A history mixed from two others may contradict itself where neither of them does. */
@@ -28,7 +29,9 @@ export function abundance(history: ThermalHistory, candidate: CandidateInput): A
   const result = mechanismOf(candidate).abundance(history, candidate)
   if (!(result.omegaH2 > 0 && result.omegaH2 < Infinity))
     throw new ConvergenceError('the abundance found is no positive finite number')
-  return isMatterEra(history.expansion) ? { ...result, dilution: history.expansion.dilution } : result
+  const guards = [...result.guards, ...bathTableGuards(history, decisiveTemperatures(candidate, result))]
+  const dilution = isMatterEra(history.expansion) ? { dilution: history.expansion.dilution } : {}
+  return { ...result, ...dilution, guards }
 }
 
 /** The same from the wire: parses, fills defaults in, solves. */

@@ -12,7 +12,7 @@ export function panelEdges(
   widest: number,
   more: readonly number[] = [],
 ): number[] {
-  const inner = [...history.radiation.table.edges, ...history.breaks.map(Math.log), ...more].filter(
+  const inner = [...history.radiation.edges, ...history.breaks.map(Math.log), ...more].filter(
     (edge) => edge > cold && edge < hot,
   )
   const cuts = [hot, ...inner.sort((a, b) => b - a), cold]
@@ -27,14 +27,14 @@ export function panelEdges(
   return edges
 }
 
-/** Breaks of the history and those given, as ln T, strictly between two values: where an integrator restarts. Descending. */
+/** Breaks and kinks of the history and those given, as ln T, strictly between two values: where an integrator restarts. Descending. */
 export function breaksBetween(
   history: ThermalHistory,
   hot: number,
   cold: number,
   more: readonly number[] = [],
 ): number[] {
-  return [...new Set([...history.breaks.map(Math.log), ...more])]
+  return [...new Set([...[...history.breaks, ...history.kinks].map(Math.log), ...more])]
     .filter((edge) => edge < hot - SAME && edge > cold + SAME)
     .sort((a, b) => b - a)
 }

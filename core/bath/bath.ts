@@ -10,12 +10,24 @@ export interface BathPoint {
   gP: number
 }
 
+/** A range in which a bath follows rows: cheap to read there, and with a kink in a higher derivative at every row. */
+export interface FollowedRows {
+  readonly lowestGeV: number
+  readonly highestGeV: number
+  /** Temperatures, GeV, ascending, of rows between which a quadrature finds it smooth. */
+  readonly edgesGeV: readonly number[]
+  /** Those where a higher derivative jumps so much that an integrator does better to restart. */
+  readonly kinksGeV: readonly number[]
+}
+
 /** A part of the bath, or the whole, as a function of temperature. */
 export interface BathPart {
   /** Temperatures, GeV, where a value or one of its first derivatives jumps. */
   readonly breaks: readonly number[]
   /** Temperatures, GeV, around which it changes within a fraction of an e-fold: where a table has to look closely. */
   readonly sharp?: readonly number[]
+  /** Where it follows rows of its own. Absent where it follows none. */
+  readonly rows?: FollowedRows
   /** Writes the part at temperature T, GeV, into `out`. At a step the cold side is taken. */
   evaluate(temperatureGeV: number, out: BathPoint): void
 }

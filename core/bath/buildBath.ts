@@ -8,6 +8,7 @@ import { crossover } from './treatments/crossover.ts'
 import { idealSwitch } from './treatments/idealSwitch.ts'
 import { lattice2014 } from './treatments/lattice2014.ts'
 import { thresholds } from './treatments/thresholds.ts'
+import { uploadedBath } from './uploadedBath.ts'
 import { fit2018Bath, lattice2016Bath } from './wholeBath.ts'
 
 /** Extra species that share the bath's temperature and entropy. */
@@ -42,5 +43,7 @@ export function buildBath(
       return lattice2016Bath(neutrinos, others)
     case 'fit-2018':
       return fit2018Bath(bath.band, others)
+    case 'uploaded':
+      return uploadedBath(bath, neutrinos, others)
   }
 }

@@ -22,7 +22,7 @@ const emptyWhole = (): WholeBathPoint => ({ gRho: 0, gS: 0, logSlope: 0 })
  * Writes a whole-bath point, with further species of the bath added, into `out`. The pressure Ts − ρ holds only while all
  * share one temperature, so below 10^0.5 MeV it is undefined.
  */
-function finish(
+export function finishWhole(
   whole: WholeBathPoint,
   others: readonly Particle[],
   temperatureGeV: number,
@@ -46,7 +46,7 @@ export function fit2018Bath(band: number, others: readonly Particle[]): BathPart
     breaks: [FIT_JOIN_GEV, ...(band === 0 ? [] : BAND_BREAKS_GEV)],
     evaluate(temperatureGeV, out) {
       fitWithBand(temperatureGeV, band, whole)
-      finish(whole, others, temperatureGeV, out)
+      finishWhole(whole, others, temperatureGeV, out)
     },
   }
 }
@@ -90,7 +90,7 @@ export function lattice2016Bath(neutrinos: NeutrinosInput, others: readonly Part
         whole.gS = joinS * ideal.gS
         whole.logSlope = ideal.gSSlope / ideal.gS
       }
-      finish(whole, others, temperatureGeV, out)
+      finishWhole(whole, others, temperatureGeV, out)
     },
   }
 }

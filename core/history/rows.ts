@@ -2,6 +2,8 @@
 import { emptyPoint } from '../bath/bath.ts'
 import { HBARC_GEV_CM, HBAR_GEV_S, SOLAR_MASS_GEV } from '../constants/natural.ts'
 import type { HistoryRow } from '../wire/compute.ts'
+import type { BathInput } from '../wire/history.ts'
+import { ONE_TEMPERATURE_GEV } from '../wire/uploadedBath.ts'
 import { LATE_GEV, lateUniverse } from './lateUniverse.ts'
 import { ages } from './time.ts'
 import { emptyExpansion, hubbleOf, setRadiation } from './expansionPoint.ts'
@@ -13,25 +15,34 @@ export const entropyTodayPerCm3 = (history: ThermalHistory): number =>
   history.entropyToday / HBARC_GEV_CM ** 3
 
 /** Why some pressures are null, in words; undefined when the treatment defines them everywhere. */
-export function pressureUndefinedBecause(history: ThermalHistory): string | undefined {
-  if (history.input.bath.treatment !== 'fit-2018') return undefined
-  return 'below 10^0.5 MeV the 2018 fit gives ρ and s only, and p = Ts − ρ does not hold once neutrinos have their own temperature'
+export function pressureUndefinedBecause({ input: { bath } }: ThermalHistory): string | undefined {
+  const because = (what: string): string =>
+    `below 10^0.5 MeV ${what} gives ρ and s only, and p = Ts − ρ does not hold once neutrinos have their own temperature`
+  if (bath.treatment === 'fit-2018') return because('the 2018 fit')
+  if (bath.treatment === 'uploaded' && bath.points[0]!.temperatureGeV < ONE_TEMPERATURE_GEV)
+    return because('the uploaded table')
+  return undefined
 }
+
+/** Whether ρ and s come each for itself, so that nothing makes them obey dρ = T ds. */
+const independentColumns = (bath: BathInput): boolean =>
+  bath.treatment === 'fit-2018' ||
+  bath.treatment === 'lattice-2016' ||
+  (bath.treatment === 'uploaded' && bath.points[0]!.gRho !== undefined && bath.points[0]!.gS !== undefined)
 
 /** Step in ln T of the derivative below; its error is of order step², 1e-8. */
 const STEP = 1e-4
 
 /**
  * (dρ/dT)/(T ds/dT) − 1: how far a fitted or tabulated whole bath is from dρ = T ds, which a bath of one temperature obeys
- * exactly. Zero for a treatment defined by a pressure; null where the bath has no single temperature.
+ * exactly. Zero for a treatment defined by a pressure, or by one of g_ρ and g_s; null where the bath has no single temperature.
  */
 function identityResidual(history: ThermalHistory, temperatureGeV: number): number | null {
   const { bath } = history.radiation
-  const whole = history.input.bath.treatment === 'fit-2018' || history.input.bath.treatment === 'lattice-2016'
   const point = emptyPoint()
   bath.evaluate(temperatureGeV, point)
   if (Number.isNaN(point.gP) || temperatureGeV < history.input.neutrinos.decouplingTemperatureGeV) return null
-  if (!whole) return 0
+  if (!independentColumns(history.input.bath)) return 0
   const { gRho, gS, gSSlope } = point
   bath.evaluate(temperatureGeV * Math.exp(STEP), point)
   const hot = point.gRho

@@ -7,13 +7,12 @@
  */
 import { entropyNumberToday } from '../bath/neutrinos.ts'
 import { GEV_PER_KELVIN } from '../constants/natural.ts'
-import { evaluate } from '../numerics/interpolation/chebyshev.ts'
 import type { HistoryInput } from '../wire/history.ts'
 import { ENTROPY_FACTOR, setRadiation } from './expansionPoint.ts'
 import type { ExpansionPoint } from './expansionPoint.ts'
 import { expansionOf } from './expansions/expansionOf.ts'
 import type { Expansion } from './expansions/expansion.ts'
-import { G_RHO, G_S, LOG_SLOPE, radiationOf } from './radiation.ts'
+import { COLUMNS, G_RHO, G_S, LOG_SLOPE, radiationOf } from './radiation.ts'
 import type { Radiation } from './radiation.ts'
 
 export interface ThermalHistory {
@@ -26,6 +25,8 @@ export interface ThermalHistory {
   readonly entropyToday: number
   /** Temperatures, GeV, ascending, where integrators must restart. */
   readonly breaks: readonly number[]
+  /** Temperatures, GeV, ascending, where a higher derivative jumps enough for an integrator to restart. */
+  readonly kinks: readonly number[]
   /** Relative error of the tabulated numbers. */
   readonly tableError: number
   /** Writes the state at ln(T/GeV) into `out`; no allocation. */
@@ -36,8 +37,7 @@ export interface ThermalHistory {
 export function buildHistory(input: HistoryInput): ThermalHistory {
   const radiation = radiationOf(input)
   const expansion = expansionOf(input, radiation)
-  const { table } = radiation
-  const columns = new Float64Array(3)
+  const columns = new Float64Array(COLUMNS)
   const temperatureToday = input.today.temperatureK * GEV_PER_KELVIN
   return {
     input,
@@ -46,9 +46,10 @@ export function buildHistory(input: HistoryInput): ThermalHistory {
     temperatureToday,
     entropyToday: ENTROPY_FACTOR * entropyNumberToday(input.neutrinos) * temperatureToday ** 3,
     breaks: [...new Set([...radiation.breaks, ...expansion.breaks])].sort((a, b) => a - b),
-    tableError: table.error,
+    kinks: radiation.kinks,
+    tableError: radiation.error,
     at(lnT, out) {
-      evaluate(table, lnT, columns)
+      radiation.read(lnT, columns)
       setRadiation(out, Math.exp(lnT), columns[G_RHO]!, columns[G_S]!, columns[LOG_SLOPE]!)
       expansion.complete(lnT, out)
     },

@@ -21,7 +21,7 @@ export function ages(history: ThermalHistory, temperaturesGeV: readonly number[]
   }
   const order = temperaturesGeV.map((_, i) => i).sort((i, j) => temperaturesGeV[j]! - temperaturesGeV[i]!)
   const hottest = Math.max(history.expansion.ageStartsAt, temperaturesGeV[order[0]!] ?? 0)
-  const cuts = [...history.breaks, LATE_GEV].map(Math.log).sort((a, b) => b - a)
+  const cuts = [...history.breaks, ...history.kinks, LATE_GEV].map(Math.log).sort((a, b) => b - a)
 
   let from = Math.log(hottest)
   history.at(from, point)

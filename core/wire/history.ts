@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { degreesOfFreedom, nonNegative, positive, quantumStatistics, temperatureGeV } from './numbers.ts'
+import { bathRows } from './uploadedBath.ts'
 
 const transitionTemperatureGeV = z
   .number()
@@ -46,6 +47,7 @@ export const bathInput = z
           'Place within the spread of the two published whole-bath determinations: 0 the fit, +1 the 2016 table',
         ),
     }),
+    z.strictObject({ treatment: z.literal('uploaded'), points: bathRows }),
   ])
   .meta({ id: 'Bath' })
 

@@ -1,5 +1,6 @@
 /** Inputs as a user could write them, drawn from the whole of what the wire takes. */
 import fc from 'fast-check'
+import { LATTICE_2016_ROWS } from '#core/bath/treatments/lattice2016Table'
 
 /** Evenly in the logarithm. (A double drawn at random has its exponents about zero: nearly every number would be 1.) */
 export const between = (low: number, high: number) =>
@@ -27,6 +28,14 @@ export const bath = fc.oneof(
     { requiredKeys: ['treatment'] },
   ),
   fc.constant({ treatment: 'lattice-2016' }),
+  // From 10^0.5 MeV on one of the columns will do.
+  fc.constantFrom(['gRho', 'gS'] as const, ['gRho'] as const, ['gS'] as const).map((columns) => ({
+    treatment: 'uploaded',
+    points: LATTICE_2016_ROWS.slice(1).map((row) => ({
+      temperatureGeV: row.temperatureGeV,
+      ...Object.fromEntries(columns.map((column) => [column, row[column]])),
+    })),
+  })),
   fc.record({ treatment: fc.constant('fit-2018'), band: evenly(-1, 1) }, { requiredKeys: ['treatment'] }),
 )
 

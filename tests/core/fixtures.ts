@@ -74,6 +74,7 @@ export interface CrossSectionsForDensity {
 
 export const speciesFixture = read('species') as SpeciesFixture
 export const bathFixture = read('bath') as { blocks: BathBlock[]; extraSpeciesBlocks: BathBlock[] }
+export const uploadedFixture = read('uploaded') as { blocks: (BathBlock & { name: string })[] }
 export const historyFixture = read('history') as {
   expansions: HistoryBlock[]
   earlyMatter: HistoryBlock[]

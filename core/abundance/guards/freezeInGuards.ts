@@ -7,6 +7,8 @@ export interface FreezeInFacts {
   yieldToday: number
   /** Y_eq of the candidate at the production peak. */
   equilibriumYield: number
+  /** Production per candidate in equilibrium over H at the production peak. */
+  rateOverHubble: number
   maximumTemperatureGeV: number | null
   /** Where production would peak were the temperature not bounded, GeV. */
   unboundedPeakGeV: number
@@ -17,6 +19,9 @@ const KEV = 1e-6
 /** Y/Y_eq where Y_eq is too small for a double. */
 const LARGEST_FRACTION = 1e300
 
+/** Guards that say the inverse process counts. */
+export const OF_THE_INVERSE: readonly string[] = ['not-freeze-in', 'production-above-expansion']
+
 /** Guards common to every freeze-in. */
 export function freezeInGuards(facts: FreezeInFacts): Guard[] {
   const guards: Guard[] = []
@@ -25,6 +30,13 @@ export function freezeInGuards(facts: FreezeInFacts): Guard[] {
     const message = 'The yield comes near that of equilibrium: the inverse process would lower it.'
     guards.push(
       raise('not-freeze-in', message, fraction, 0.1, 'Y/Y_eq', 'Hall et al., JHEP 03 (2010) 080, §2'),
+    )
+  }
+  const rate = Math.min(facts.rateOverHubble, LARGEST_FRACTION)
+  if (rate > 1) {
+    const message = 'Production is faster than the expansion: it brings the candidate into equilibrium.'
+    guards.push(
+      raise('production-above-expansion', message, rate, 1, 'Γ/H', 'Hall et al., JHEP 03 (2010) 080, §2'),
     )
   }
   const { maximumTemperatureGeV, unboundedPeakGeV } = facts

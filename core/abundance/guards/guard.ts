@@ -17,7 +17,7 @@ const TITLES = {
   'start-near-freeze-out': 'Maximum temperature against freeze-out',
   'late-annihilation': 'Freeze-out after nucleosynthesis began',
   'kinetic-equilibrium': 'Kinetic equilibrium near a narrow resonance or bound state',
-  'table-extrapolated': 'A table of ⟨σv⟩ used outside its rows',
+  'table-extrapolated': 'A table used outside its rows',
   'not-freeze-in': 'Yield against equilibrium',
   'production-cut-off': 'Maximum temperature against the production peak',
   'late-decay': 'Lifetime against nucleosynthesis',
@@ -27,6 +27,7 @@ const TITLES = {
   'fluid-too-late': 'End of the fluid against nucleosynthesis',
   'entropy-too-late': 'Entropy release against nucleosynthesis',
   'reheating-too-late': 'Reheating against nucleosynthesis',
+  'production-above-expansion': 'Production rate against the expansion',
   'massless-today': 'Massless species still coupled today',
 } as const
 
@@ -37,6 +38,7 @@ const HISTORY: readonly GuardCode[] = [
   'entropy-too-late',
   'reheating-too-late',
   'massless-today',
+  'table-extrapolated',
 ]
 const ANNIHILATION: readonly GuardCode[] = [
   'unitarity',
@@ -45,16 +47,20 @@ const ANNIHILATION: readonly GuardCode[] = [
   'start-near-freeze-out',
   'late-annihilation',
   'kinetic-equilibrium',
-  'table-extrapolated',
 ]
-const FREEZE_IN: readonly GuardCode[] = ['not-freeze-in', 'production-cut-off', 'structure-formation']
+const FREEZE_IN: readonly GuardCode[] = [
+  'not-freeze-in',
+  'production-above-expansion',
+  'production-cut-off',
+  'structure-formation',
+]
 
 const BY_MECHANISM: Record<Mechanism, readonly GuardCode[]> = {
   'freeze-out': ANNIHILATION,
   'freeze-in-decay': [...FREEZE_IN, 'late-decay', 'decay-near-freeze-out'],
   'freeze-in-scattering': FREEZE_IN,
   'freeze-in-ultraviolet': FREEZE_IN,
-  asymmetric: [],
+  asymmetric: ANNIHILATION,
   'hot-relic': ['not-hot'],
 }
 

@@ -60,11 +60,11 @@ function expansionGuards({ expansion }: ThermalHistory['input']): Guard[] {
 }
 
 /** Guards on the history alone. */
-export function historyGuards({ input }: ThermalHistory): Guard[] {
+export function historyGuards({ input, temperatureToday }: ThermalHistory): Guard[] {
   const massless = input.extraSpecies
-    .filter((species) => species.massGeV === 0 && species.coupling.kind === 'bath')
+    .filter((species) => species.massGeV < temperatureToday && species.coupling.kind === 'bath')
     .map((species) => {
-      const message = `${species.name} is massless and shares the bath's temperature to this day: today's entropy leaves it out.`
+      const message = `${species.name} is still relativistic today and shares the bath's temperature: today's entropy leaves it out.`
       return raise('massless-today', message, species.degreesOfFreedom, 0, 'g', COMMON_PRACTICE)
     })
   return [...expansionGuards(input), ...massless]

@@ -7,6 +7,7 @@ import type { AsymmetricInput } from '../../wire/candidate.ts'
 import { AnnihilatingState } from '../annihilatingState.ts'
 import { solveFreezeOut } from '../freezeOut.ts'
 import { EFFORTS } from '../freezeOutEffort.ts'
+import { freezeOutGuards } from '../guards/freezeOutGuards.ts'
 import { historyGuards } from '../guards/historyGuards.ts'
 import { annihilationRate } from '../rates/annihilationRate.ts'
 import { relicDensity } from '../relicDensity.ts'
@@ -36,10 +37,11 @@ const startOf = (history: ThermalHistory, candidate: AsymmetricInput) => ({
 export const asymmetric: Mechanism<AsymmetricInput> = {
   abundance(history, candidate) {
     const state = antiparticles(history, candidate)
+    const start = startOf(history, candidate)
     const { value, error } = checkedFreezeOut(
       history,
       state,
-      startOf(history, candidate),
+      start,
       ({ yieldToday }) => candidate.asymmetry + 2 * yieldToday,
     )
     const yieldAntiparticle = value.yieldToday
@@ -50,7 +52,7 @@ export const asymmetric: Mechanism<AsymmetricInput> = {
       numericalError: error,
       yieldParticle: candidate.asymmetry + yieldAntiparticle,
       yieldAntiparticle,
-      guards: historyGuards(history),
+      guards: [...freezeOutGuards(history, candidate, state, start, value), ...historyGuards(history)],
     }
   },
 

@@ -17,7 +17,8 @@ import type { FreezeInSource } from '../freezeIn.ts'
 import { decaySource } from '../freezeInSources.ts'
 import type { Effort } from '../freezeOutEffort.ts'
 import { DECAY_EFFORTS, LEFT_OF_DECAY_TOLERANCE, LEFT_OF_TOLERANCE } from '../freezeOutEffort.ts'
-import { decayGuards } from '../guards/freezeInGuards.ts'
+import { OF_THE_INVERSE, decayGuards } from '../guards/freezeInGuards.ts'
+import { annihilationTableGuards } from '../guards/tableGuards.ts'
 import { annihilationRate } from '../rates/annihilationRate.ts'
 import { relicDensity } from '../relicDensity.ts'
 import { emptySamples } from '../yieldSamples.ts'
@@ -105,7 +106,13 @@ function throughFreezeOut(
       ...(widthOverHubble === undefined ? {} : { widthOverHubble }),
     },
     decayTimeS: ages(history, [Math.exp(result.value.lnHalfTemperature)])[0]!,
-    guards: [...common.guards, ...decayGuards({ lifetimeS: HBAR_GEV_S / width, widthOverHubble })],
+    guards: [
+      ...common.guards,
+      ...decayGuards({ lifetimeS: HBAR_GEV_S / width, widthOverHubble }),
+      ...(stable.freezeOutX === null
+        ? []
+        : annihilationTableGuards({ massGeV: candidate.parent.massGeV, annihilation }, stable.freezeOutX)),
+    ],
   }
 }
 
@@ -131,7 +138,7 @@ function fromEquilibrium(
     yieldFreezeIn: result.value,
     guards: [
       // With inverse decays kept, coming near equilibrium is no fault of the result.
-      ...common.guards.filter((guard) => !(candidate.backReaction && guard.code === 'not-freeze-in')),
+      ...common.guards.filter((guard) => !(candidate.backReaction && OF_THE_INVERSE.includes(guard.code))),
       ...decayGuards({ lifetimeS: HBAR_GEV_S / width, widthOverHubble: undefined }),
     ],
   }

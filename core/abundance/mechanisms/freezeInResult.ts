@@ -53,6 +53,7 @@ export function freezeInResult(
         massGeV: candidate.massGeV,
         yieldToday: value,
         equilibriumYield: equilibriumYield(history, candidate, peak),
+        rateOverHubble: productionOverHubble(history, candidate, source)(peak),
         maximumTemperatureGeV: history.input.maximumTemperatureGeV,
         unboundedPeakGeV: source.scaleGeV / 3,
       }),

@@ -5,6 +5,7 @@ import { InputError } from '../../wire/fault.ts'
 import { FREEZE_IN_RULES, solveFreezeIn } from '../freezeIn.ts'
 import type { FreezeInSource } from '../freezeIn.ts'
 import { scatteringSource } from '../freezeInSources.ts'
+import { scatteringTableGuards } from '../guards/tableGuards.ts'
 import { emptySamples } from '../yieldSamples.ts'
 import { checkedFreezeIn, freezeInResult, productionOverHubble } from './freezeInResult.ts'
 import type { Mechanism } from './mechanism.ts'
@@ -22,7 +23,9 @@ export const freezeInScattering: Mechanism<FreezeInScatteringInput> = {
   abundance(history, candidate) {
     const source = sourceOf(history, candidate)
     const result = checkedFreezeIn(history, source)
-    return { ...freezeInResult(history, candidate, source, result), yieldFreezeIn: result.value }
+    const common = freezeInResult(history, candidate, source, result)
+    const guards = scatteringTableGuards(candidate, common.productionTemperatureGeV, source.scaleGeV)
+    return { ...common, yieldFreezeIn: result.value, guards: [...common.guards, ...guards] }
   },
   yields(history, candidate, lnX) {
     const samples = emptySamples(lnX)

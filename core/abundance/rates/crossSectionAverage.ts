@@ -13,6 +13,12 @@ const FARTHEST = 80
 
 const CUTS = [0.03, 0.3, 1, 2.5, 5, 9, 14, 20, 28, 38, 50, 64]
 
+/** The least and the largest √s, GeV, that count at x = m/T. */
+export const crossSectionReach = (x: number, massGeV: number): [number, number] => [
+  2 * massGeV,
+  (2 + FARTHEST / x) * massGeV,
+]
+
 /**
  * ⟨σv⟩, GeV⁻², at x = m/T.
  * @param sigma cross-section, GeV⁻², as a function of √s, GeV

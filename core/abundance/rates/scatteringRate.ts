@@ -21,6 +21,12 @@ export interface Incoming {
 const FARTHEST = 90
 const CUTS = [0.3, 1, 2.5, 5, 9, 14, 20, 28, 38, 50, 68]
 
+/** The least and the largest √s, GeV, that count at temperature T, GeV. */
+export const scatteringReach = (temperatureGeV: number, leastRootS: number): [number, number] => [
+  leastRootS,
+  leastRootS + FARTHEST * temperatureGeV,
+]
+
 /** Fourfold steps of √s above its least value, in y, up to where the thermal scale takes over. */
 function fourfolds(leastOverT: number): number[] {
   const cuts: number[] = []

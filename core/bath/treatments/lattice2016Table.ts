@@ -23,3 +23,11 @@ export const LATTICE_2016_TABLE: readonly (readonly [
   [5.0, 102.17, 1.0075],
   [5.45, 104.98, 1.00023],
 ]
+
+/** The same as rows of T in GeV, g_ρ and g_s, with the digits the table has. */
+export const LATTICE_2016_ROWS: readonly { temperatureGeV: number; gRho: number; gS: number }[] =
+  LATTICE_2016_TABLE.map(([logTemperatureMeV, gRho, gRhoOverGS]) => ({
+    temperatureGeV: Number((10 ** (logTemperatureMeV - 3)).toPrecision(6)),
+    gRho,
+    gS: Number((gRho / gRhoOverGS).toPrecision(6)),
+  }))

@@ -10,7 +10,6 @@
  *
  * Sources: Scherrer & Turner, Phys. Rev. D 31 (1985) 681; Giudice, Kolb, Riotto, Phys. Rev. D 64 (2001) 023508.
  */
-import { evaluate } from '../../numerics/interpolation/chebyshev.ts'
 import { ConvergenceError } from '../../numerics/convergence.ts'
 import { OdeFailure, denseOde } from '../../numerics/ode/dense.ts'
 import type { DenseSolution } from '../../numerics/ode/dense.ts'
@@ -19,7 +18,7 @@ import { InputError } from '../../wire/fault.ts'
 import type { ExpansionInput } from '../../wire/history.ts'
 import { ENERGY_FACTOR, emptyExpansion, hubbleOf, setRadiation } from '../expansionPoint.ts'
 import type { ExpansionPoint } from '../expansionPoint.ts'
-import { G_RHO, G_S, HOTTEST_GEV, LOG_SLOPE } from '../radiation.ts'
+import { COLUMNS, G_RHO, G_S, HOTTEST_GEV, LOG_SLOPE } from '../radiation.ts'
 import type { Radiation } from '../radiation.ts'
 import { RADIATION, USUAL_AGE_START_GEV } from './expansion.ts'
 import type { Expansion } from './expansion.ts'
@@ -53,17 +52,17 @@ const S = 1
 
 /** Width of a field that decays when radiation alone would have T_RH: Γ = √(4π³g_ρ/45) T_RH²/M_Pl. */
 function widthOf(reheatTemperature: number, radiation: Radiation): number {
-  const columns = new Float64Array(3)
-  evaluate(radiation.table, Math.log(reheatTemperature), columns)
+  const columns = new Float64Array(COLUMNS)
+  radiation.read(Math.log(reheatTemperature), columns)
   return hubbleOf(ENERGY_FACTOR * columns[G_RHO]! * reheatTemperature ** 4)
 }
 
 /** Solves the era from its start both ways. */
 function solveEra(radiation: Radiation, width: number, start: number, coldest: number): DenseSolution {
-  const columns = new Float64Array(3)
+  const columns = new Float64Array(COLUMNS)
   const point = emptyExpansion()
   const radiationAt = (lnT: number): void => {
-    evaluate(radiation.table, lnT, columns)
+    radiation.read(lnT, columns)
     setRadiation(point, Math.exp(lnT), columns[G_RHO]!, columns[G_S]!, columns[LOG_SLOPE]!)
   }
   radiationAt(Math.log(start))
@@ -93,7 +92,7 @@ function solveEra(radiation: Radiation, width: number, start: number, coldest: n
     Math.log(start),
     initial,
     { low: Math.log(coldest), high: Math.min(Math.log(start) + BACK, Math.log(HOTTEST_GEV)) },
-    radiation.breaks.map(Math.log),
+    [...radiation.breaks, ...radiation.kinks].map(Math.log),
     TOLERANCE,
   )
 }
@@ -147,8 +146,8 @@ function eraFromStart(input: EarlyMatterInput, radiation: Radiation, start: numb
     producesUntil: branching > 0 ? coldest : null,
     radiationOnly: (temperatureGeV) => temperatureGeV < coldest,
     matterFraction(lnT) {
-      const columns = new Float64Array(3)
-      evaluate(radiation.table, lnT, columns)
+      const columns = new Float64Array(COLUMNS)
+      radiation.read(lnT, columns)
       setRadiation(point, Math.exp(lnT), columns[G_RHO]!, columns[G_S]!, columns[LOG_SLOPE]!)
       complete(lnT, point)
       return point.otherEnergy / point.energy

@@ -22,6 +22,16 @@ describe('describeAssumption', () => {
       { bath: { treatment: 'crossover', hadrons: 'long' } },
       'smooth crossover at 156.5 MeV, 20 MeV wide',
     ],
+    [
+      'bath',
+      {
+        bath: {
+          treatment: 'uploaded',
+          points: [0.01, 0.1, 0.5, 2].map((temperatureGeV, i) => ({ temperatureGeV, gS: 11 + 20 * i })),
+        },
+      },
+      'uploaded table, 4 rows of g_s, 10 MeV to 2 GeV',
+    ],
     ['neutrinos', {}, 'decouple at 2 MeV, Neff 3.044'],
     ['neutrinos', { neutrinos: { treatment: 'instantaneous' } }, 'decouple at 2 MeV, instantly'],
     ['extraSpecies', {}, 'none'],

@@ -3,6 +3,7 @@ import type { ReactNode } from 'react'
 import type {
   AnnihilationInput,
   AssumptionGroup,
+  BathRow,
   CandidateInput,
   HistoryInput,
   Mechanism,
@@ -29,6 +30,7 @@ export const BATH_TITLES: Record<HistoryInput['bath']['treatment'], string> = {
   'lattice-2014': 'lattice pressure of 2014',
   'lattice-2016': 'lattice bath of 2016',
   'fit-2018': '2018 fit',
+  uploaded: 'uploaded table',
 }
 
 export const MECHANISM_TITLES: Record<Mechanism, string> = {
@@ -52,6 +54,15 @@ export const ANNIHILATION_TITLES: Record<AnnihilationInput['kind'], string> = {
 
 const percent = (share: number): string => `${share > 0 ? '+' : '−'}${Math.abs(share * 100).toFixed(0)} %`
 
+/** How many rows, from where to where, and of what. */
+function uploadedWords(points: readonly BathRow[]): string {
+  const [first, last] = [points[0], points.at(-1)]
+  if (!first || !last) return 'no rows yet'
+  const columns = first.gRho === undefined ? 'g_s' : first.gS === undefined ? 'g_ρ' : 'g_ρ and g_s'
+  const range = `${temperatureText(first.temperatureGeV)} to ${temperatureText(last.temperatureGeV)}`
+  return `${points.length} rows of ${columns}, ${range}`
+}
+
 function bathWords({ bath }: HistoryInput): ReactNode {
   const title = BATH_TITLES[bath.treatment]
   switch (bath.treatment) {
@@ -67,6 +78,8 @@ function bathWords({ bath }: HistoryInput): ReactNode {
       return `${title}, ${bath.hadrons} hadron list`
     case 'lattice-2016':
       return title
+    case 'uploaded':
+      return `${title}, ${uploadedWords(bath.points)}`
   }
 }
 

@@ -39,6 +39,15 @@ describe('the address of the Bench', () => {
     expect(readAddress(writeAddress(address))).toEqual(address)
   })
 
+  it('carries an uploaded bath, and none whose rows the forms cannot show', () => {
+    const points = [0.01, 0.1, 0.5, 2].map((temperatureGeV, i) => ({ temperatureGeV, gS: 11 + 20 * i }))
+    const withBath = (bath: unknown) => ({ history: { ...history, bath } as typeof history })
+    const draft = withBath({ treatment: 'uploaded', points })
+    expect(decodeDraft(encodeDraft(draft))).toEqual(draft)
+    for (const bad of [undefined, 'many', [[0.1, 17]], [null]])
+      expect(decodeDraft(encodeDraft(withBath({ treatment: 'uploaded', points: bad })))).toEqual({})
+  })
+
   it('carries any draft, letters of any script included, in characters an address takes as they are', () => {
     fc.assert(
       fc.property(

@@ -114,10 +114,41 @@ describe('the candidate’s form', () => {
 })
 
 describe('the forms of the assumptions', () => {
+  it('take a pasted bath, say what its only column is, and show what the core found in a row', () => {
+    const fault = { path: 'history.bath.points[2].gS', message: 'allowed: above 17', value: 1 }
+    render(
+      <FaultProvider faults={[fault]}>
+        <HistoryBench group="bath" />
+      </FaultProvider>,
+    )
+    choose('Treatment', 'uploaded')
+    expect(screen.getByText('row 3, gS: allowed: above 17')).toBeDefined()
+    expect(screen.queryByLabelText('The column beside T')).toBeNull()
+    const rows = screen.getByLabelText<HTMLTextAreaElement>(/^Rows of T/)
+    fireEvent.change(rows, { target: { value: 'T\tg_s\n0.01 11\n0.1 17\n0.5 62\n2 73' } })
+    expect(history.bath).toEqual({
+      treatment: 'uploaded',
+      points: [
+        { temperatureGeV: 0.01, gS: 11 },
+        { temperatureGeV: 0.1, gS: 17 },
+        { temperatureGeV: 0.5, gS: 62 },
+        { temperatureGeV: 2, gS: 73 },
+      ],
+    })
+    expect(historyInput.safeParse(history).success).toBe(true)
+    choose('The column beside T', 'gRho')
+    expect(history.bath).toMatchObject({ points: [{ temperatureGeV: 0.01, gRho: 11 }, {}, {}, {}] })
+    fireEvent.change(rows, { target: { value: '0.01 11\n0.1 17\nhalf 62' } })
+    expect(screen.getByText(/^Line 3 is not two or three numbers/)).toBeDefined()
+    expect(history.bath).toMatchObject({ points: [{}, {}, {}, {}] })
+  })
+
   it.each(Object.keys(BATH_TITLES))('begin the bath %s with its defaults', (treatment) => {
     render(<HistoryBench group="bath" />)
     choose('Treatment', treatment)
-    expect(history).toEqual(historyInput.parse({ bath: { treatment } }))
+    // A table has no default: it begins with one to be replaced.
+    const points = 'points' in history.bath ? { points: history.bath.points } : {}
+    expect(history).toEqual(historyInput.parse({ bath: { treatment, ...points } }))
   })
 
   it.each(['radiation', 'fluid', 'early-matter', 'entropy-step'])(

@@ -24,6 +24,19 @@ describe('fieldsOf', () => {
       { path: 'points[1]', value: [3, 4] },
     ])
   })
+  it('keeps a row of a table together when its columns have names', () => {
+    const points = [
+      { temperatureGeV: 0.1, gS: 17 },
+      { temperatureGeV: 1, gS: 75 },
+    ]
+    expect(fieldsOf({ points })).toEqual([
+      { path: 'points[0]', value: points[0] },
+      { path: 'points[1]', value: points[1] },
+    ])
+    expect(differences({ points }, { points: [points[0], { temperatureGeV: 1, gS: 76 }] })).toEqual([
+      { path: 'points[1]', before: points[1], after: { temperatureGeV: 1, gS: 76 } },
+    ])
+  })
 })
 
 describe('differences', () => {

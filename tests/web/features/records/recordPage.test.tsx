@@ -47,6 +47,29 @@ describe('the page of a history', () => {
     expect((await region('Assumptions of revision 1')).textContent).toContain('not bounded')
   })
 
+  it('does not print the thousands of rows in which two tables differ', async () => {
+    const table = (shift: number) =>
+      aHistory({
+        bath: {
+          treatment: 'uploaded',
+          points: Array.from({ length: 2000 }, (_, i) => ({
+            temperatureGeV: 0.01 * 1.006 ** i,
+            gS: 11 + 90 * (i / 2000) + shift,
+          })),
+        },
+      })
+    serve({
+      [`/histories/${uuid(100)}`]: { body: historyRecordOf(100, 'Own table', table(0), table(0.1)) },
+      '/session': { body: sessionOf(uuid(102)) },
+      '/evaluations': { body: { items: [], next: null } },
+    })
+    show()
+    const comparison = await screen.findByRole('table', { name: /^What differs between revisions/ })
+    expect(within(comparison).getAllByRole('row').length).toBeLessThan(60)
+    fireEvent.click(within(comparison).getByRole('button', { name: 'Show 400 more of 2000 that differ' }))
+    expect(within(comparison).getAllByRole('row').length).toBeGreaterThan(400)
+  })
+
   it('lists every revision with its note and the way to the Bench, and marks the baseline', async () => {
     show()
     const items = within(await region('Revisions')).getAllByRole('listitem')

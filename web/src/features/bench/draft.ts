@@ -46,12 +46,16 @@ const isObject = (value: unknown): value is Record<string, unknown> =>
 
 const EXPANSION_KINDS: readonly unknown[] = ['radiation', 'fluid', 'early-matter', 'entropy-step']
 
+const isBathTable = (value: unknown): boolean =>
+  Array.isArray(value) && value.every((row) => isObject(row) && typeof row['temperatureGeV'] === 'number')
+
 /** Whether the forms can show it; whether it can be computed from is for the core to say. */
 const isHistory = (value: unknown): boolean =>
   isObject(value) &&
   ASSUMPTION_ORDER.every((group) => group in value) &&
   isObject(value['bath']) &&
   String(value['bath']['treatment']) in BATH_TITLES &&
+  (value['bath']['treatment'] !== 'uploaded' || isBathTable(value['bath']['points'])) &&
   isObject(value['neutrinos']) &&
   Array.isArray(value['extraSpecies']) &&
   value['extraSpecies'].every((species) => isObject(species) && isObject(species['coupling'])) &&

@@ -1,4 +1,6 @@
+import { useState } from 'react'
 import type { ReactNode } from 'react'
+import { Button } from '../../components/ui/Button.tsx'
 import { FieldText } from './FieldTable.tsx'
 import type { Difference } from './fields.ts'
 import { speaksOf } from './wordings.ts'
@@ -45,18 +47,41 @@ export function DifferenceTable({ found, before, after }: DifferenceTableProps) 
               before={wording.words}
               after={after.wordings[index]?.words}
             />
-            {fields.map((field) => (
-              <Row
-                key={field.path}
-                title={<span className="font-mono">{field.path}</span>}
-                before={<FieldText path={field.path} value={field.before} />}
-                after={<FieldText path={field.path} value={field.after} />}
-              />
-            ))}
+            <DifferingFields fields={fields} />
           </tbody>
         )
       })}
     </table>
+  )
+}
+
+/** Fields shown before the rest is asked for: two tables may differ in every one of their rows. */
+const AT_FIRST = 40
+const MORE = 400
+
+function DifferingFields({ fields }: { fields: readonly Difference[] }) {
+  const [most, setMost] = useState(AT_FIRST)
+  const hidden = fields.length - most
+  return (
+    <>
+      {fields.slice(0, most).map((field) => (
+        <Row
+          key={field.path}
+          title={<span className="font-mono">{field.path}</span>}
+          before={<FieldText path={field.path} value={field.before} />}
+          after={<FieldText path={field.path} value={field.after} />}
+        />
+      ))}
+      {hidden > 0 ? (
+        <tr className="max-md:block">
+          <td colSpan={3} className="py-1 max-md:block">
+            <Button variant="link" onClick={() => setMost(most + MORE)}>
+              Show {Math.min(hidden, MORE)} more of {fields.length} that differ
+            </Button>
+          </td>
+        </tr>
+      ) : null}
+    </>
   )
 }
 

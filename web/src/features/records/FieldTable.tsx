@@ -2,10 +2,12 @@ import { useState } from 'react'
 import { Button } from '../../components/ui/Button.tsx'
 import { Num } from '../../components/ui/Num.tsx'
 import { unitOf } from './fields.ts'
-import type { FieldEntry, FieldValue } from './fields.ts'
+import type { FieldEntry, FieldValue, NamedRow } from './fields.ts'
 
 /** Digits that show an input as it was given, whatever it was. */
 const AS_GIVEN = 15
+
+const isNumbers = (value: readonly number[] | NamedRow): value is readonly number[] => Array.isArray(value)
 
 /** One value of a field: numbers with the unit in the field's name, words as they are. */
 export function FieldText({ path, value }: { path: string; value: FieldValue | undefined }) {
@@ -23,8 +25,15 @@ export function FieldText({ path, value }: { path: string; value: FieldValue | u
     const unit = unitOf(path)
     return <Num value={value} digits={AS_GIVEN} {...(unit === undefined ? {} : { unit })} />
   }
-  return value.map((number, index) => (
-    <span key={index} className="pr-3">
+  if (isNumbers(value))
+    return value.map((number, index) => (
+      <span key={index} className="pr-3">
+        <Num value={number} digits={AS_GIVEN} />
+      </span>
+    ))
+  return Object.entries(value).map(([name, number]) => (
+    <span key={name} className="pr-3">
+      <span className="font-mono text-caption text-soft">{name}</span>{' '}
       <Num value={number} digits={AS_GIVEN} />
     </span>
   ))

@@ -1,9 +1,11 @@
 /** One form for each group of assumptions. */
+import { LATTICE_2016_ROWS } from '#core/bath/treatments/lattice2016Table'
 import type { HistoryInput } from '#core/wire/index'
 import { NEff } from '../../../components/ui/symbols.tsx'
 import { Select } from '../../../components/ui/Select.tsx'
 import { Switch } from '../../../components/ui/Switch.tsx'
 import { BATH_TITLES } from '../../../lib/describe.tsx'
+import { BathTableField } from './BathTableField.tsx'
 import { EnergyField, PlainField } from './fields.tsx'
 import { ExpansionForm } from './ExpansionForm.tsx'
 import { ExtraSpeciesForm } from './ExtraSpeciesForm.tsx'
@@ -28,6 +30,8 @@ const BATHS: Record<Bath['treatment'], Bath> = {
   'lattice-2014': { treatment: 'lattice-2014', hadrons: 'long' },
   'lattice-2016': { treatment: 'lattice-2016' },
   'fit-2018': { treatment: 'fit-2018', band: 0 },
+  // A table to be replaced, that shows what one looks like.
+  uploaded: { treatment: 'uploaded', points: [...LATTICE_2016_ROWS] },
 }
 
 const BATH_OPTIONS = (Object.keys(BATHS) as Bath['treatment'][]).map((value) => ({
@@ -70,6 +74,13 @@ function BathForm({ value, onChange }: FormProps<Bath>) {
           value={value.hadrons}
           options={HADRON_OPTIONS}
           onChange={(hadrons) => onChange({ ...value, hadrons })}
+        />
+      ) : null}
+      {'points' in value ? (
+        <BathTableField
+          path="history.bath.points"
+          value={value.points}
+          onChange={(points) => onChange({ ...value, points })}
         />
       ) : null}
       {'band' in value ? (

@@ -1,25 +1,16 @@
 import { useState } from 'react'
 import { Field } from '../../../components/ui/Field.tsx'
-import { useFault } from '../faults.tsx'
+import { useFaultWithin } from '../faults.tsx'
+import { readColumns } from './columns.ts'
 
 type Points = [number, number][]
 
 const textOf = (points: Points): string => points.map((row) => row.join('  ')).join('\n')
 
-/** Rows of two numbers apart by space, comma, semicolon or tab; the first row that is not so is named. */
 function readPoints(text: string): { points: Points } | { message: string } {
-  const points: Points = []
-  const lines = text.split('\n')
-  for (const [index, line] of lines.entries()) {
-    if (line.trim() === '' || line.trim().startsWith('#')) continue
-    const numbers = line
-      .trim()
-      .split(/[\s,;]+/)
-      .map(Number)
-    if (numbers.length !== 2 || numbers.some((number) => !Number.isFinite(number)))
-      return { message: `Line ${index + 1} is not two numbers. “91.2  3.4e-9” would do.` }
-    points.push([numbers[0]!, numbers[1]!])
-  }
+  const read = readColumns(text, 'two numbers. “91.2  3.4e-9” would do.', (numbers) => numbers === 2)
+  if ('message' in read) return read
+  const points = read.rows.map(([first, second]): Points[number] => [first!, second!])
   return points.length < 2 ? { message: 'At least two rows are needed.' } : { points }
 }
 
@@ -39,11 +30,11 @@ export function PointsField({
   // The text counts only while it stands for the rows shown: undo or reset replace it.
   const text = typed !== null && (typed.points === null || typed.points === value) ? typed.text : null
   const read = text === null ? null : readPoints(text)
-  const fault = useFault(path)
+  const fault = useFaultWithin(path)
   return (
     <Field
       label={label}
-      hint="Pasted columns do; lines that begin with # are left out."
+      hint="Pasted columns do, with or without their names; lines that begin with # are left out."
       fault={read && 'message' in read ? read.message : fault}
     >
       {(control) => (
