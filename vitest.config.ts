@@ -14,7 +14,7 @@ const wholePrograms = { testTimeout: 180_000, hookTimeout: 300_000, maxWorkers: 
 export default defineConfig({
   test: {
     projects: [
-      { test: { name: 'core', include: CORE, setupFiles, sequence: { groupOrder: 0 } } },
+      { test: { name: 'core', include: CORE, setupFiles, testTimeout: 30_000, sequence: { groupOrder: 0 } } },
       {
         plugins: [react()],
         test: { name: 'web', include: WEB, setupFiles, environment: 'jsdom', sequence: { groupOrder: 0 } },
