@@ -13,7 +13,7 @@ export const computeHistoryEndpoint = endpoint({
   body: historyRequest,
   status: 200,
   answer: historyResult,
-  answerIs: 'One row per temperature, in the order asked',
+  answerIs: 'One row per temperature or age, in the order asked; N_eff and ΔN_eff at 1 keV',
 })
 
 export const computeAbundanceEndpoint = endpoint({

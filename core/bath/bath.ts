@@ -10,6 +10,17 @@ export interface BathPoint {
   gP: number
 }
 
+/** What one species gives to the bath, or several that cannot be told apart; effective numbers in the photons' temperature. */
+export interface Contribution {
+  name: string
+  /** Its own temperature, GeV. */
+  temperatureGeV: number
+  gRho: number
+  gS: number
+  /** NaN where the treatment leaves the pressure undefined. */
+  gP: number
+}
+
 /** A range in which a bath follows rows: cheap to read there, and with a kink in a higher derivative at every row. */
 export interface FollowedRows {
   readonly lowestGeV: number
@@ -30,6 +41,8 @@ export interface BathPart {
   readonly rows?: FollowedRows
   /** Writes the part at temperature T, GeV, into `out`. At a step the cold side is taken. */
   evaluate(temperatureGeV: number, out: BathPoint): void
+  /** What it is made of at temperature T, GeV: adds up to what `evaluate` writes. What is not there is left out. */
+  contributions(temperatureGeV: number): Contribution[]
 }
 
 export const emptyPoint = (): BathPoint => ({ gRho: 0, gS: 0, gSSlope: 0, gP: 0 })

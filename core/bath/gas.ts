@@ -1,5 +1,6 @@
 /** Ideal gases of several species, and how a pressure becomes the numbers of a bath. */
-import type { BathPoint } from './bath.ts'
+import { emptyPoint } from './bath.ts'
+import type { BathPoint, Contribution } from './bath.ts'
 import type { Particle } from './particles/species.ts'
 import { addSpecies } from './speciesTable.ts'
 import type { PressureJet } from './speciesTable.ts'
@@ -35,3 +36,21 @@ export function pointOfJet(jet: PressureJet, out: BathPoint): void {
   out.gSSlope = (45 / (2 * PI2)) * (entropySlopeOf(jet) - 3 * entropy)
   out.gP = (90 / PI2) * jet.value
 }
+
+/** A part with the effective numbers of a pressure jet at temperature T, GeV. */
+export function contributionOf(name: string, jet: PressureJet, temperatureGeV: number): Contribution {
+  const { gRho, gS, gP } = pointOf(jet)
+  return { name, temperatureGeV, gRho, gS, gP }
+}
+
+const pointOf = (jet: PressureJet): BathPoint => {
+  const point = emptyPoint()
+  pointOfJet(jet, point)
+  return point
+}
+
+/** What each species of an ideal gas gives at temperature T, GeV; those of which nothing is left are left out. */
+export const gasContributions = (particles: readonly Particle[], temperatureGeV: number): Contribution[] =>
+  particles
+    .map((particle) => contributionOf(particle.name, gasJet([particle], temperatureGeV), temperatureGeV))
+    .filter(({ gRho }) => gRho > 0)

@@ -9,7 +9,7 @@
  */
 import type { NeutrinosInput } from '../wire/history.ts'
 import { emptyPoint } from './bath.ts'
-import type { BathPart } from './bath.ts'
+import type { BathPart, BathPoint } from './bath.ts'
 import { NEUTRINO_G } from './particles/standardModel.ts'
 
 /** T_ν/T after e± annihilation if neutrinos let go when electrons were still fully relativistic. */
@@ -42,29 +42,45 @@ export function withNeutrinos(plasma: BathPart, neutrinos: NeutrinosInput): Bath
   const lateEnergy = specified ? (nEff / 3) * (TEXTBOOK_RATIO / lateRatio) ** 4 : 1
   const lateEntropy = specified ? (nEff / 3) ** entropyPower * (TEXTBOOK_RATIO / lateRatio) ** 3 : 1
 
+  /** Adds the neutrinos to the numbers of the plasma; returns T_ν/T. */
+  const addTo = (out: BathPoint, temperatureGeV: number): number => {
+    if (temperatureGeV >= decoupling) {
+      out.gRho += NEUTRINO_G
+      out.gS += NEUTRINO_G
+      out.gP += NEUTRINO_G
+      return 1
+    }
+    const logSlope = out.gSSlope / out.gS
+    const ratio = Math.cbrt(out.gS / gAtDecoupling)
+    // With nothing left to heat the photons, T_ν stays at T and the late values hold at once.
+    const heated = 1 / lateRatio - 1
+    const growth = heated < NOTHING_TO_HEAT ? 1 : (1 / ratio - 1) / heated
+    const growthSlope = heated < NOTHING_TO_HEAT ? 0 : -logSlope / 3 / ratio / heated
+    const energy = NEUTRINO_G * (1 + (lateEnergy - 1) * growth) * ratio ** 4
+    const inEntropy = 1 + (lateEntropy - 1) * growth
+    out.gRho += energy
+    out.gP += energy
+    out.gS += NEUTRINO_G * inEntropy * ratio ** 3
+    out.gSSlope += NEUTRINO_G * ratio ** 3 * ((lateEntropy - 1) * growthSlope + inEntropy * logSlope)
+    return ratio
+  }
+
   return {
     breaks: [...plasma.breaks, decoupling],
     sharp: plasma.sharp ?? [],
     evaluate(temperatureGeV, out) {
       plasma.evaluate(temperatureGeV, out)
-      if (temperatureGeV >= decoupling) {
-        out.gRho += NEUTRINO_G
-        out.gS += NEUTRINO_G
-        out.gP += NEUTRINO_G
-        return
-      }
-      const logSlope = out.gSSlope / out.gS
-      const ratio = Math.cbrt(out.gS / gAtDecoupling)
-      // With nothing left to heat the photons, T_ν stays at T and the late values hold at once.
-      const heated = 1 / lateRatio - 1
-      const growth = heated < NOTHING_TO_HEAT ? 1 : (1 / ratio - 1) / heated
-      const growthSlope = heated < NOTHING_TO_HEAT ? 0 : -logSlope / 3 / ratio / heated
-      const energy = NEUTRINO_G * (1 + (lateEnergy - 1) * growth) * ratio ** 4
-      const inEntropy = 1 + (lateEntropy - 1) * growth
-      out.gRho += energy
-      out.gP += energy
-      out.gS += NEUTRINO_G * inEntropy * ratio ** 3
-      out.gSSlope += NEUTRINO_G * ratio ** 3 * ((lateEntropy - 1) * growthSlope + inEntropy * logSlope)
+      addTo(out, temperatureGeV)
+    },
+    contributions(temperatureGeV) {
+      plasma.evaluate(temperatureGeV, point)
+      const { gRho, gS, gP } = point
+      const ratio = addTo(point, temperatureGeV)
+      const own = { gRho: point.gRho - gRho, gS: point.gS - gS, gP: point.gP - gP }
+      return [
+        ...plasma.contributions(temperatureGeV),
+        { name: 'ν', temperatureGeV: ratio * temperatureGeV, ...own },
+      ]
     },
   }
 }

@@ -6,7 +6,7 @@
  */
 import type { ExtraSpeciesInput } from '../wire/history.ts'
 import { emptyPoint } from './bath.ts'
-import type { BathPart } from './bath.ts'
+import type { BathPart, Contribution } from './bath.ts'
 import { pointOfJet, zeroJet } from './gas.ts'
 import { addSpeciesAt } from './speciesTable.ts'
 import type { PressureJet } from './speciesTable.ts'
@@ -22,6 +22,8 @@ export interface SpeciesApart {
   readonly breaks: readonly number[]
   /** Adds up all species apart, given the bath's g_s at that temperature. */
   evaluate(temperatureGeV: number, bathGS: number, out: ApartPoint): void
+  /** What each gives to ρ and p, in the order of the input; their entropy is their own, so g_s is zero. */
+  contributions(temperatureGeV: number, bathGS: number): Contribution[]
   /** Temperature of each species apart, GeV, in the order of the input. */
   temperatures(temperatureGeV: number, bathGS: number): number[]
 }
@@ -88,6 +90,19 @@ export function speciesApart(extraSpecies: readonly ExtraSpeciesInput[], bath: B
         out.gP += point.gP * (own / temperatureGeV) ** 4
       }
     },
+    contributions: (temperatureGeV, bathGS) =>
+      laws.map(({ species, temperatureAt }) => {
+        const own = temperatureAt(temperatureGeV, bathGS)
+        pointOfJet(jetOf(species, own), point)
+        const hotter = (own / temperatureGeV) ** 4
+        return {
+          name: species.name,
+          temperatureGeV: own,
+          gRho: point.gRho * hotter,
+          gS: 0,
+          gP: point.gP * hotter,
+        }
+      }),
     temperatures: (temperatureGeV, bathGS) =>
       laws.map(({ temperatureAt }) => temperatureAt(temperatureGeV, bathGS)),
   }

@@ -14,14 +14,14 @@ import { InputError } from '../wire/fault.ts'
 import type { BathColumn, BathRow } from '../wire/uploadedBath.ts'
 import { emptyPoint } from './bath.ts'
 import type { BathPart, BathPoint } from './bath.ts'
-import { gasJet, pointOfJet } from './gas.ts'
+import { gasContributions, gasJet, pointOfJet } from './gas.ts'
 import { withNeutrinos } from './neutrinos.ts'
 import { SHORT_HADRON_LIST } from './particles/hadrons.ts'
 import type { Particle } from './particles/species.ts'
 import { NEUTRINO_G, WITHOUT_COLOUR, WITH_COLOUR } from './particles/standardModel.ts'
 import { emptyRowsPoint, joinRows } from './treatments/uploaded.ts'
 import type { JoinedRows } from './treatments/uploaded.ts'
-import { finishWhole } from './wholeBath.ts'
+import { finishWhole, wholeContributions } from './wholeBath.ts'
 
 /** Largest distance of the first row from the ideal gases below it, relative. */
 const LARGEST_STEP = 0.05
@@ -32,7 +32,11 @@ const STANDARD_MODEL = [...WITHOUT_COLOUR, ...WITH_COLOUR]
 const coldGases = (neutrinos: NeutrinosInput, others: readonly Particle[]): BathPart => {
   const species = [...WITHOUT_COLOUR, ...SHORT_HADRON_LIST, ...others]
   return withNeutrinos(
-    { breaks: [], evaluate: (temperatureGeV, out) => pointOfJet(gasJet(species, temperatureGeV), out) },
+    {
+      breaks: [],
+      evaluate: (temperatureGeV, out) => pointOfJet(gasJet(species, temperatureGeV), out),
+      contributions: (temperatureGeV) => gasContributions(species, temperatureGeV),
+    },
     { treatment: 'instantaneous', decouplingTemperatureGeV: neutrinos.decouplingTemperatureGeV },
   )
 }
@@ -107,6 +111,21 @@ export function uploadedBath(
   const ratio = rows.gS / ideal.gS
   const excess = rows.gRho - ratio * ideal.gRho
 
+  /** From the first row on. */
+  const setWhole = (temperatureGeV: number): void => {
+    if (temperatureGeV <= last) {
+      joined.evaluate(Math.log(temperatureGeV), rows)
+      whole.gRho = rows.gRho
+      whole.gS = rows.gS
+      whole.logSlope = rows.gSSlope / rows.gS
+      return
+    }
+    hotGas(temperatureGeV, ideal)
+    whole.gRho = ratio * ideal.gRho + excess * (last / temperatureGeV) ** 4
+    whole.gS = ratio * ideal.gS
+    whole.logSlope = ideal.gSSlope / ideal.gS
+  }
+
   return {
     breaks: [...cold.breaks.filter((temperature) => temperature < first), first, last],
     rows: {
@@ -120,18 +139,13 @@ export function uploadedBath(
         cold.evaluate(temperatureGeV, out)
         return
       }
-      if (temperatureGeV <= last) {
-        joined.evaluate(Math.log(temperatureGeV), rows)
-        whole.gRho = rows.gRho
-        whole.gS = rows.gS
-        whole.logSlope = rows.gSSlope / rows.gS
-      } else {
-        hotGas(temperatureGeV, ideal)
-        whole.gRho = ratio * ideal.gRho + excess * (last / temperatureGeV) ** 4
-        whole.gS = ratio * ideal.gS
-        whole.logSlope = ideal.gSSlope / ideal.gS
-      }
+      setWhole(temperatureGeV)
       finishWhole(whole, others, temperatureGeV, out)
+    },
+    contributions(temperatureGeV) {
+      if (temperatureGeV < first) return cold.contributions(temperatureGeV)
+      setWhole(temperatureGeV)
+      return wholeContributions(whole, others, temperatureGeV)
     },
   }
 }

@@ -1,8 +1,8 @@
 /** The two treatments that come with their own neutrinos: the 2018 fit and the 2016 table. */
 import type { NeutrinosInput } from '../wire/history.ts'
 import { emptyPoint } from './bath.ts'
-import type { BathPart, BathPoint } from './bath.ts'
-import { addGas, gasJet, pointOfJet, zeroJet } from './gas.ts'
+import type { BathPart, BathPoint, Contribution } from './bath.ts'
+import { addGas, gasContributions, gasJet, pointOfJet, zeroJet } from './gas.ts'
 import { withNeutrinos } from './neutrinos.ts'
 import { ELECTRON, NEUTRINO_G, PHOTON, WITHOUT_COLOUR, WITH_COLOUR } from './particles/standardModel.ts'
 import type { Particle } from './particles/species.ts'
@@ -40,6 +40,18 @@ export function finishWhole(
   out.gP = temperatureGeV >= LATTICE_2016_LOWEST_GEV ? 4 * out.gS - 3 * out.gRho : NaN
 }
 
+/** A whole bath, which is one, and further species beside it. */
+export function wholeContributions(
+  whole: WholeBathPoint,
+  others: readonly Particle[],
+  temperatureGeV: number,
+): Contribution[] {
+  const point = emptyPoint()
+  finishWhole(whole, [], temperatureGeV, point)
+  const { gRho, gS, gP } = point
+  return [{ name: 'whole bath', temperatureGeV, gRho, gS, gP }, ...gasContributions(others, temperatureGeV)]
+}
+
 export function fit2018Bath(band: number, others: readonly Particle[]): BathPart {
   const whole = emptyWhole()
   return {
@@ -48,13 +60,19 @@ export function fit2018Bath(band: number, others: readonly Particle[]): BathPart
       fitWithBand(temperatureGeV, band, whole)
       finishWhole(whole, others, temperatureGeV, out)
     },
+    contributions(temperatureGeV) {
+      fitWithBand(temperatureGeV, band, whole)
+      return wholeContributions(whole, others, temperatureGeV)
+    },
   }
 }
 
 export function lattice2016Bath(neutrinos: NeutrinosInput, others: readonly Particle[]): BathPart {
+  const coldSpecies = [PHOTON, ELECTRON, ...others]
   const coldPlasma: BathPart = {
     breaks: [],
-    evaluate: (temperatureGeV, out) => pointOfJet(gasJet([PHOTON, ELECTRON, ...others], temperatureGeV), out),
+    evaluate: (temperatureGeV, out) => pointOfJet(gasJet(coldSpecies, temperatureGeV), out),
+    contributions: (temperatureGeV) => gasContributions(coldSpecies, temperatureGeV),
   }
   // With this treatment N_eff sets only today's entropy: below the table neutrinos keep the entropy they had.
   const cold = withNeutrinos(coldPlasma, {
@@ -74,6 +92,20 @@ export function lattice2016Bath(neutrinos: NeutrinosInput, others: readonly Part
   const joinS = last.gS / ideal.gS
   const whole = emptyWhole()
 
+  /** From the lowest row used on. */
+  const setWhole = (temperatureGeV: number): void => {
+    if (temperatureGeV <= last.temperatureGeV) {
+      lattice2016(temperatureGeV, whole)
+      return
+    }
+    // Above the last row g_s is the ideal gas times the joining factor; g_ρ/g_s returns to the ideal one as (T_last/T)².
+    idealGas(temperatureGeV)
+    const fade = 1 + (joinRho / joinS - 1) * (last.temperatureGeV / temperatureGeV) ** 2
+    whole.gRho = joinS * fade * ideal.gRho
+    whole.gS = joinS * ideal.gS
+    whole.logSlope = ideal.gSSlope / ideal.gS
+  }
+
   return {
     breaks: [...cold.breaks, ...LATTICE_2016_KNOTS_GEV],
     evaluate(temperatureGeV, out) {
@@ -81,16 +113,13 @@ export function lattice2016Bath(neutrinos: NeutrinosInput, others: readonly Part
         cold.evaluate(temperatureGeV, out)
         return
       }
-      if (temperatureGeV <= last.temperatureGeV) lattice2016(temperatureGeV, whole)
-      else {
-        // Above the last row g_s is the ideal gas times the joining factor; g_ρ/g_s returns to the ideal one as (T_last/T)².
-        idealGas(temperatureGeV)
-        const fade = 1 + (joinRho / joinS - 1) * (last.temperatureGeV / temperatureGeV) ** 2
-        whole.gRho = joinS * fade * ideal.gRho
-        whole.gS = joinS * ideal.gS
-        whole.logSlope = ideal.gSSlope / ideal.gS
-      }
+      setWhole(temperatureGeV)
       finishWhole(whole, others, temperatureGeV, out)
+    },
+    contributions(temperatureGeV) {
+      if (temperatureGeV < LATTICE_2016_LOWEST_GEV) return cold.contributions(temperatureGeV)
+      setWhole(temperatureGeV)
+      return wholeContributions(whole, others, temperatureGeV)
     },
   }
 }

@@ -57,8 +57,23 @@ export function scaleFactor(history: ThermalHistory, point: ExpansionPoint): num
   return Math.cbrt(history.entropyToday / (Math.exp(point.lnDilution) * point.entropy))
 }
 
-/** One row for each temperature, GeV, in the order given. */
-export function historyRows(history: ThermalHistory, temperaturesGeV: readonly number[]): HistoryRow[] {
+/** What the radiation is made of, given the bath's g_s. */
+function contributionsAt(
+  { radiation: { bath, apart } }: ThermalHistory,
+  temperatureGeV: number,
+  bathGS: number,
+): NonNullable<HistoryRow['contributions']> {
+  return [...bath.contributions(temperatureGeV), ...apart.contributions(temperatureGeV, bathGS)].map(
+    (part) => ({ ...part, gP: Number.isFinite(part.gP) ? part.gP : null }),
+  )
+}
+
+/** One row for each temperature, GeV, in the order given; with `contributions`, what each is made of. */
+export function historyRows(
+  history: ThermalHistory,
+  temperaturesGeV: readonly number[],
+  contributions = false,
+): HistoryRow[] {
   const times = ages(history, temperaturesGeV)
   const late = lateUniverse(history)
   const { bath, apart } = history.radiation
@@ -96,11 +111,13 @@ export function historyRows(history: ThermalHistory, temperaturesGeV: readonly n
       hubbleGeV: hubble,
       timeS: times[i]!,
       scaleFactor: a,
+      redshift: 1 / a - 1,
       equationOfState: defined ? pressure / energy : null,
       soundSpeedSquared: barotropic ? 1 / (3 + logSlope) : null,
       identityResidual: identityResidual(history, temperature),
       waveFrequencyHz: (a * hubble) / (2 * Math.PI) / HBAR_GEV_S,
       horizonMassSolar: ((4 * Math.PI) / 3) * (energy / hubble ** 3 / SOLAR_MASS_GEV),
+      ...(contributions ? { contributions: contributionsAt(history, temperature, point.gS) } : {}),
       ...(temperature < LATE_GEV ? { matterDensityGeV4: matter, darkEnergyDensityGeV4: darkEnergy } : {}),
     }
   })

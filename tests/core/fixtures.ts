@@ -15,6 +15,7 @@ export interface BathBlock {
   bath: unknown
   neutrinos: unknown
   extraSpecies?: unknown
+  deltaNEffAt1KeV?: number
   rows: ({ temperatureGeV: number; temperaturesOfSpeciesApartGeV?: number[] } & Numbers)[]
 }
 

@@ -43,3 +43,6 @@ export const WITH_COLOUR: readonly Particle[] = [...LIGHT_QUARKS, ...HEAVY_QUARK
 
 /** g_ρ, and g_s, of three massless neutrino species at the photons' temperature: 7/8 · 3 · 2. */
 export const NEUTRINO_G = 5.25
+
+/** What quarks, gluons and hadrons are called where they cannot be told apart. */
+export const STRONG_PART = 'strongly interacting'

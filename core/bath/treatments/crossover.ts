@@ -9,9 +9,17 @@
  */
 import { evaluate, integrate, tabulate } from '../../numerics/interpolation/chebyshev.ts'
 import type { BathPart } from '../bath.ts'
-import { addGas, entropyOf, entropySlopeOf, gasJet, pointOfJet } from '../gas.ts'
+import {
+  addGas,
+  contributionOf,
+  entropyOf,
+  entropySlopeOf,
+  gasContributions,
+  gasJet,
+  pointOfJet,
+} from '../gas.ts'
 import type { PressureJet } from '../speciesTable.ts'
-import { WITHOUT_COLOUR, WITH_COLOUR } from '../particles/standardModel.ts'
+import { STRONG_PART, WITHOUT_COLOUR, WITH_COLOUR } from '../particles/standardModel.ts'
 import type { Particle } from '../particles/species.ts'
 
 /** ln(T/T_c)/δ beyond which the weight differs from 0 or 1 by less than e^−42. */
@@ -92,6 +100,16 @@ export function crossover(
       const jet = strongJet(Math.log(temperatureGeV))
       addGas(jet, always, temperatureGeV)
       pointOfJet(jet, out)
+    },
+    // Entropies are blended by weights, pressure and energy are not: the energy between them belongs to neither, so the strong part
+    // is one. Below the blend it is hadrons and nothing else.
+    contributions(temperatureGeV) {
+      const lnT = Math.log(temperatureGeV)
+      const strong =
+        lnT <= low
+          ? gasContributions(hadrons, temperatureGeV)
+          : [contributionOf(STRONG_PART, strongJet(lnT), temperatureGeV)]
+      return [...gasContributions(always, temperatureGeV), ...strong]
     },
   }
 }

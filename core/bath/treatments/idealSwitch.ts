@@ -1,6 +1,6 @@
 /** Exact ideal-gas integrals for every species; free quarks and gluons above T_c, a gas of hadrons at and below it. */
 import type { BathPart } from '../bath.ts'
-import { gasJet, pointOfJet } from '../gas.ts'
+import { gasContributions, gasJet, pointOfJet } from '../gas.ts'
 import { WITHOUT_COLOUR, WITH_COLOUR } from '../particles/standardModel.ts'
 import type { Particle } from '../particles/species.ts'
 
@@ -11,10 +11,10 @@ export function idealSwitch(
 ): BathPart {
   const above = [...WITHOUT_COLOUR, ...WITH_COLOUR, ...others]
   const below = [...WITHOUT_COLOUR, ...hadrons, ...others]
+  const speciesAt = (temperatureGeV: number) => (temperatureGeV > transitionTemperatureGeV ? above : below)
   return {
     breaks: [transitionTemperatureGeV],
-    evaluate(temperatureGeV, out) {
-      pointOfJet(gasJet(temperatureGeV > transitionTemperatureGeV ? above : below, temperatureGeV), out)
-    },
+    evaluate: (temperatureGeV, out) => pointOfJet(gasJet(speciesAt(temperatureGeV), temperatureGeV), out),
+    contributions: (temperatureGeV) => gasContributions(speciesAt(temperatureGeV), temperatureGeV),
   }
 }

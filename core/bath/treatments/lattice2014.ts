@@ -5,10 +5,10 @@
  *
  * Source: HotQCD, Phys. Rev. D 90 (2014) 094503, parametrisation written down from memory; the join is this project's own.
  */
-import type { BathPart } from '../bath.ts'
-import { addGas, gasJet, pointOfJet, zeroJet } from '../gas.ts'
+import type { BathPart, Contribution } from '../bath.ts'
+import { addGas, contributionOf, gasContributions, gasJet, pointOfJet, zeroJet } from '../gas.ts'
 import type { PressureJet } from '../speciesTable.ts'
-import { HEAVY_QUARKS, WITHOUT_COLOUR } from '../particles/standardModel.ts'
+import { HEAVY_QUARKS, STRONG_PART, WITHOUT_COLOUR } from '../particles/standardModel.ts'
 import type { Particle } from '../particles/species.ts'
 
 const JOIN_LOW_GEV = 0.13
@@ -77,28 +77,56 @@ function joinWeight(temperatureGeV: number): PressureJet {
   return { value: z ** 3 * (10 - 15 * z + 6 * z * z), first: perZ * dz, second: perZ2 * dz * dz + perZ * dz }
 }
 
+function add(jet: PressureJet, part: PressureJet): void {
+  jet.value += part.value
+  jet.first += part.first
+  jet.second += part.second
+}
+
+/**
+ * The strong part by its species: hadrons below the join; above it c, b, t, and what the lattice has, which is one. Within the join
+ * the entropy of what appears and what goes cannot be told apart.
+ */
+function strongContributions(
+  hadrons: readonly Particle[],
+  temperatureGeV: number,
+  addStrong: (jet: PressureJet, temperatureGeV: number) => void,
+): Contribution[] {
+  if (temperatureGeV <= JOIN_LOW_GEV) return gasContributions(hadrons, temperatureGeV)
+  if (temperatureGeV >= JOIN_HIGH_GEV)
+    return [
+      contributionOf('u, d, s, g', latticePressure2014(temperatureGeV), temperatureGeV),
+      ...gasContributions(HEAVY_QUARKS, temperatureGeV),
+    ]
+  const strong = zeroJet()
+  addStrong(strong, temperatureGeV)
+  return [contributionOf(STRONG_PART, strong, temperatureGeV)]
+}
+
 export function lattice2014(hadrons: readonly Particle[], others: readonly Particle[]): BathPart {
   const always = [...WITHOUT_COLOUR, ...others]
-  const add = (jet: PressureJet, part: PressureJet): void => {
-    jet.value += part.value
-    jet.first += part.first
-    jet.second += part.second
+  const addStrong = (jet: PressureJet, temperatureGeV: number): void => {
+    const weight = joinWeight(temperatureGeV)
+    if (weight.value < 1) {
+      const rest = { value: 1 - weight.value, first: -weight.first, second: -weight.second }
+      add(jet, product(rest, gasJet(hadrons, temperatureGeV)))
+    }
+    if (weight.value > 0) {
+      const strong = latticePressure2014(temperatureGeV)
+      addGas(strong, HEAVY_QUARKS, temperatureGeV)
+      add(jet, product(weight, strong))
+    }
   }
   return {
     breaks: [JOIN_LOW_GEV, JOIN_HIGH_GEV],
     evaluate(temperatureGeV, out) {
       const jet = gasJet(always, temperatureGeV)
-      const weight = joinWeight(temperatureGeV)
-      if (weight.value < 1) {
-        const rest = { value: 1 - weight.value, first: -weight.first, second: -weight.second }
-        add(jet, product(rest, gasJet(hadrons, temperatureGeV)))
-      }
-      if (weight.value > 0) {
-        const strong = latticePressure2014(temperatureGeV)
-        addGas(strong, HEAVY_QUARKS, temperatureGeV)
-        add(jet, product(weight, strong))
-      }
+      addStrong(jet, temperatureGeV)
       pointOfJet(jet, out)
     },
+    contributions: (temperatureGeV) => [
+      ...gasContributions(always, temperatureGeV),
+      ...strongContributions(hadrons, temperatureGeV, addStrong),
+    ],
   }
 }

@@ -32,5 +32,14 @@ export function thresholds(transitionTemperatureGeV: number, others: readonly Pa
       out.gRho = out.gS = out.gP = countAbove(always, temperatureGeV) + countAbove(strong, temperatureGeV)
       out.gSSlope = 0
     },
+    contributions(temperatureGeV) {
+      const strong = temperatureGeV > transitionTemperatureGeV ? WITH_COLOUR : PIONS
+      return [...always, ...strong]
+        .filter((particle) => temperatureGeV > particle.massGeV)
+        .map((particle) => {
+          const g = weight(particle)
+          return { name: particle.name, temperatureGeV, gRho: g, gS: g, gP: g }
+        })
+    },
   }
 }

@@ -108,6 +108,7 @@ describe('a derived history', () => {
       expect(relative(rows[0]!.timeS / year, age.ageAtZ1100Years)).toBeLessThan(1e-9)
       expect(relative(rows[1]!.timeS / year, age.ageTodayYears)).toBeLessThan(1e-9)
       expect(relative(1 / rows[0]!.scaleFactor, 1101)).toBeLessThan(1e-9)
+      expect(relative(rows[0]!.redshift, 1100)).toBeLessThan(1e-9)
       expect(relative(rows[1]!.hubbleGeV / HUBBLE_100_GEV, age.hubbleTodayOverH100)).toBeLessThan(1e-10)
     },
   )
