@@ -8,6 +8,7 @@ export { checkEvidence, evidenceOf, LEAST_ALLOWED_DIFFERENCE } from './evidence/
 export { computeHistory } from './history/computeHistory.ts'
 export { computeSolve } from './inverse/solveFor.ts'
 export { computeAttribution } from './sensitivity/computeAttribution.ts'
+export { computeConversion } from './conversions/convert.ts'
 export { computeLaboratory } from './laboratory/laboratory.ts'
 export { computePropagation } from './sensitivity/propagation.ts'
 export { buildHistory } from './history/thermalHistory.ts'

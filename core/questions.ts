@@ -1,6 +1,7 @@
 /** What can be asked of the core, by its name on the wire: from an input as it came to the steps that answer it. */
 import { computeAbundance } from './abundance/abundance.ts'
 import { checkEvidence } from './evidence/evidence.ts'
+import { convertSteps } from './conversions/convert.ts'
 import { computeHistory } from './history/computeHistory.ts'
 import { solveSteps } from './inverse/solveFor.ts'
 import { attributeSteps } from './sensitivity/computeAttribution.ts'
@@ -17,6 +18,7 @@ export const QUESTIONS = {
   solve: solveSteps,
   attribute: attributeSteps,
   propagate: propagateSteps,
+  convert: convertSteps,
   laboratory: laboratorySteps,
 } satisfies Record<string, (input: unknown) => Steps<unknown>>
 

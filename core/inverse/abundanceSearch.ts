@@ -69,7 +69,12 @@ export function* abundanceSearch(
       return NaN
     }
   }
-  const { roots, leaps, samples } = yield* levelSearch({ ...scale, f, reached: REACHED, noise: NOISE })
+  const { roots, leaps, samples } = yield* levelSearch({
+    ...scale,
+    f,
+    reached: REACHED,
+    noise: NOISE,
+  })
   return {
     solutions: roots.map(scale.valueOf),
     leaps: leaps.map(scale.valueOf),

@@ -2,7 +2,8 @@
  * All places in an interval where a function crosses zero. It may be undefined (NaN) in parts and may leap. The interval is scanned
  * evenly; the edges of undefined parts are closed in on, so that a crossing beside one is seen; where the function bends towards
  * zero without reaching it, its turning point is looked at, so that two crossings close together are both found; and every change
- * of sign is followed to its root or its leap.
+ * of sign is followed to its root or its leap. What may be missed: a pair of crossings within one stretch of a third, and a dip
+ * narrower than a stretch that does not show beside it.
  */
 import { brentSearch } from '../numerics/roots/brent.ts'
 import type { Sample } from '../numerics/roots/brent.ts'

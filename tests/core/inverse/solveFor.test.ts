@@ -185,4 +185,19 @@ describe('the inverse question', () => {
     )
     expect(computeSolve(ask).explanation).toBeNull()
   })
+
+  it('sees a resonance narrower than its scan, in the usual bracket', () => {
+    // The case of tests/reference/inverse.json whose bracket there is [40, 60].
+    const resonance = { kind: 'resonance', massGeV: 105, widthGeV: 0.105, spin: 1, branchingProduct: 1e-5 }
+    const { solutions, searched } = computeSolve({
+      history: {},
+      candidate: { ...wimp, annihilation: resonance },
+      solveFor: 'candidate.massGeV',
+    })
+    expect(searched).toEqual([1e-6, 1e6])
+    const near = solutions.filter((mass) => mass > 40 && mass < 60)
+    expect(near).toHaveLength(2)
+    expect(relative(near[0]!, 49.70790909591068)).toBeLessThan(1e-6)
+    expect(relative(near[1]!, 52.973114118104654)).toBeLessThan(1e-6)
+  }, 60_000)
 })
