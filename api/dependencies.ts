@@ -3,7 +3,7 @@ import type { Database } from '#db/database'
 import type { JobQueue } from '#db/queue/jobQueue'
 import type { Logger } from 'pino'
 import type { MailSink } from './mail/sink.ts'
-import type { SignInLimits } from './middleware/signInLimit.ts'
+import type { AttemptLimits } from './services/attempts.ts'
 
 /** What the server is built from; tests give their own. */
 export interface AppDependencies {
@@ -19,7 +19,9 @@ export interface AppDependencies {
   webRoot: string
   /** The sign-ins to offer on the sign-in page; null outside demo mode. */
   demoSignIns: PublicInfo['demoSignIns'] | null
-  signInLimits: SignInLimits
   /** Requests a minute taken of one person, key or address; a key may carry a number of its own. */
   requestsPerMinute: number
+  attemptLimits: AttemptLimits
+  /** Where people reach the product, for the links in mails; never taken from a request, which could claim any. */
+  origin: () => string
 }

@@ -21,6 +21,9 @@ const MAY = {
   'own-keys': { roles: EVERYONE, scope: null },
   'all-keys': { roles: LEADS, scope: null },
   'read-audit-log': { roles: LEADS, scope: 'read' },
+  /** One’s own account, whichever the role. */
+  'keep-account': { roles: EVERYONE, scope: null },
+  invite: { roles: LEADS, scope: null },
 } as const satisfies Record<string, Rule>
 
 export type Action = keyof typeof MAY

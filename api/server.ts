@@ -1,6 +1,7 @@
 import type { Server } from 'node:http'
 import type { AddressInfo } from 'node:net'
 import { connect } from '#db/database'
+import type { Database } from '#db/database'
 import { jobQueue } from '#db/queue/jobQueue'
 import { readDemoGroup } from '#db/seed/demoData'
 import type { Logger } from 'pino'
@@ -13,8 +14,11 @@ import { smtpSender } from './mail/sender.ts'
 import type { MailSender } from './mail/sender.ts'
 import type { MailSink } from './mail/sink.ts'
 import { USUAL_REQUESTS_PER_MINUTE } from './middleware/requestLimit.ts'
-import { DEFAULT_SIGN_IN_LIMITS } from './middleware/signInLimit.ts'
 import { sealer } from './secrets/sealer.ts'
+import { DEFAULT_ATTEMPT_LIMITS, attemptCounter } from './services/attempts.ts'
+import { firstGroupLink } from './services/firstGroup.ts'
+import { linksFrom } from './services/links.ts'
+import type { Links } from './services/links.ts'
 
 /** How long requests under way may take to finish after a signal, milliseconds. */
 const PATIENCE_MS = 10_000
@@ -58,6 +62,21 @@ function stopOnSignal(server: Server, close: () => Promise<void>, logger: Logger
   process.once('SIGINT', stop)
 }
 
+function addressOf(server: Server, host: string): string {
+  const { port } = server.address() as AddressInfo
+  return `http://${host.includes(':') ? `[${host}]` : host}:${port}`
+}
+
+/** On an empty database, says where the first group is made: to whoever reads this output, and nobody else. */
+async function offerFirstGroup(db: Database, links: Links, logger: Logger): Promise<void> {
+  try {
+    const link = await firstGroupLink(db, links)
+    if (link !== null) console.log(`there is no group yet; make the first at ${link}`)
+  } catch (error) {
+    logger.error({ err: error }, 'whether there is a group could not be seen; start again to be offered one')
+  }
+}
+
 async function main(): Promise<void> {
   const env = environmentOrExit()
   const logger = createLogger(env.logLevel)
@@ -67,6 +86,8 @@ async function main(): Promise<void> {
   const queue = jobQueue(env.databaseUrl, (error) => logger.warn({ err: error }, 'trouble with the queue'))
   const { sender, sink } = await openMail(env)
   const people = env.demo ? (await readDemoGroup()).people : null
+  let address = ''
+  const origin = (): string => env.publicUrl?.origin ?? address
   const app = createApp({
     ...env,
     db,
@@ -74,12 +95,19 @@ async function main(): Promise<void> {
     logger,
     mailSink: sink,
     demoSignIns: people,
-    signInLimits: DEFAULT_SIGN_IN_LIMITS,
     requestsPerMinute: USUAL_REQUESTS_PER_MINUTE,
+    attemptLimits: DEFAULT_ATTEMPT_LIMITS,
+    origin,
   })
   const server = await listen(app, env.host, env.port)
+  address = addressOf(server, env.host)
   const ended = new AbortController()
-  const jobs = runJobs({ db, queue, sealer: sealer(env.sessionSecret), sender, logger }, ended.signal)
+  const links = linksFrom(origin)
+  const attempts = attemptCounter(db)
+  const jobs = runJobs(
+    { db, queue, sealer: sealer(env.sessionSecret), links, attempts, sender, logger },
+    ended.signal,
+  )
   const closeAll = async (): Promise<void> => {
     ended.abort()
     await jobs
@@ -88,9 +116,8 @@ async function main(): Promise<void> {
     await close()
   }
   stopOnSignal(server, closeAll, logger)
-  const { port } = server.address() as AddressInfo
-  const host = env.host.includes(':') ? `[${env.host}]` : env.host
-  console.log(`listening on http://${host}:${port}`)
+  await offerFirstGroup(db, links, logger)
+  console.log(`listening on ${address}`)
 }
 
 await main()

@@ -7,7 +7,7 @@ import type { AddressInfo } from 'node:net'
 import type { Bench } from 'tinybench'
 import { createApp } from '#api/app'
 import { createLogger } from '#api/logger'
-import { DEFAULT_SIGN_IN_LIMITS } from '#api/middleware/signInLimit'
+import { DEFAULT_ATTEMPT_LIMITS } from '#api/services/attempts'
 import { connect } from '#db/database'
 import { jobQueue } from '#db/queue/jobQueue'
 import { migrate } from '#db/migrate'
@@ -69,7 +69,8 @@ export async function addApiBenchmarks(bench: Bench): Promise<() => Promise<void
     webRoot: 'dist/web',
     demoSignIns: null,
     requestsPerMinute: 1e9,
-    signInLimits: DEFAULT_SIGN_IN_LIMITS,
+    attemptLimits: DEFAULT_ATTEMPT_LIMITS,
+    origin: () => 'http://127.0.0.1',
   })
   const server = app.listen(0, '127.0.0.1')
   await once(server, 'listening')

@@ -4,7 +4,7 @@ import type { NodePgDatabase } from 'drizzle-orm/node-postgres'
 import pg from 'pg'
 
 export type Database = NodePgDatabase
-/** A transaction that sees one group. */
+/** A transaction that sees one group, or what belongs to one person. */
 export type GroupTransaction = Parameters<Parameters<Database['transaction']>[0]>[0]
 
 export interface DatabaseConnection {
@@ -30,6 +30,30 @@ export function withGroup<T>(
 ): Promise<T> {
   return db.transaction(async (transaction) => {
     await transaction.execute(sql`select set_config('emberline.group_id', ${groupId}, true)`)
+    return work(transaction)
+  })
+}
+
+/** Runs `work` in one transaction that sees what belongs to one person, in whichever group; no group's records. */
+export function withPerson<T>(
+  db: Database,
+  personId: string,
+  work: (transaction: GroupTransaction) => Promise<T>,
+): Promise<T> {
+  return db.transaction(async (transaction) => {
+    await transaction.execute(sql`select set_config('emberline.person_id', ${personId}, true)`)
+    return work(transaction)
+  })
+}
+
+/** Runs `work` in one transaction that sees a group, and what belongs to one of its members. */
+export function withMember<T>(
+  db: Database,
+  { group, user }: { group: { id: string }; user: { id: string } },
+  work: (transaction: GroupTransaction) => Promise<T>,
+): Promise<T> {
+  return withPerson(db, user.id, async (transaction) => {
+    await transaction.execute(sql`select set_config('emberline.group_id', ${group.id}, true)`)
     return work(transaction)
   })
 }

@@ -3,7 +3,7 @@ import { demoSignInLines, mailPageLines } from './setup/demoSignIns.mjs'
 import { freePortFrom } from './setup/freePort.mjs'
 import { fillDatabase, prepare } from './setup/prepare.mjs'
 import { runProgram } from './setup/program.mjs'
-import { LISTENING, startServer } from './setup/serverProcess.mjs'
+import { LISTENING, firstGroupLines, startServer } from './setup/serverProcess.mjs'
 import { isStopping } from './setup/stopping.mjs'
 import { Trouble } from './setup/trouble.mjs'
 
@@ -51,6 +51,7 @@ async function main() {
   const vite = await startVite({ webPort, apiPort })
   announce(vite.address)
   say(`\nEmberline, reloading as you edit, is at ${vite.address}`)
+  for (const line of firstGroupLines(api.said)) say(line)
   for (const line of mailPageLines({
     address: vite.address,
     demo: settings.demo,

@@ -9,7 +9,7 @@ import { freePortFrom } from './setup/freePort.mjs'
 import { fillDatabase, prepare } from './setup/prepare.mjs'
 import { runProgram } from './setup/program.mjs'
 import { inProject } from './setup/project.mjs'
-import { LISTENING, startServer } from './setup/serverProcess.mjs'
+import { LISTENING, firstGroupLines, startServer } from './setup/serverProcess.mjs'
 import { isStopping } from './setup/stopping.mjs'
 import { Trouble } from './setup/trouble.mjs'
 
@@ -29,9 +29,10 @@ async function choosePort({ port, host }) {
   return free
 }
 
-async function sayWhere({ address, publicUrl, logFile, demo }) {
+async function sayWhere({ address, said, publicUrl, logFile, demo }) {
   say(`\nEmberline is ready at ${address}`)
   if (publicUrl) say(`and, for everybody else, at ${publicUrl}`)
+  for (const line of firstGroupLines(said)) say(line)
   for (const line of mailPageLines({ address, demo, environment: process.env })) say(line)
   const signIns = await demoSignInLines(address)
   if (signIns.length > 0) say(['\nDemo sign-ins (made-up people):', ...signIns].join('\n'))
@@ -52,7 +53,7 @@ async function main() {
   const port = await choosePort(settings)
   // A server run for real has its log collected from standard output; here the lines above are for reading.
   const logFile = settings.databaseUrl === undefined ? join(dataFolder, 'server.log') : undefined
-  const { address, exited } = await startServer({
+  const { address, said, exited } = await startServer({
     args: SERVER,
     environment: {
       ...environment,
@@ -64,7 +65,7 @@ async function main() {
     logFile,
   })
   announce(address)
-  await sayWhere({ address, publicUrl: process.env.EMBERLINE_PUBLIC_URL, logFile, demo: settings.demo })
+  await sayWhere({ address, said, publicUrl: process.env.EMBERLINE_PUBLIC_URL, logFile, demo: settings.demo })
   await exited
   if (!isStopping())
     throw new Trouble('The server ended by itself; the database is being stopped. See its log above.')

@@ -1,4 +1,17 @@
 import { listAuditEndpoint } from './audit.ts'
+import {
+  changeEmailEndpoint,
+  changePasswordEndpoint,
+  confirmEmailEndpoint,
+  forgottenPasswordEndpoint,
+  listSessionsEndpoint,
+  readAccountEndpoint,
+  renameAccountEndpoint,
+  resetPasswordEndpoint,
+  revokeOtherSessionsEndpoint,
+  revokeSessionEndpoint,
+  sendVerificationEndpoint,
+} from './account.ts'
 import { computeAbundanceEndpoint, computeHistoryEndpoint } from './compute.ts'
 import type { Endpoint } from './endpoint.ts'
 import {
@@ -15,8 +28,22 @@ import {
 } from './guestLinks.ts'
 import { healthEndpoint, infoEndpoint } from './info.ts'
 import { createKeyEndpoint, listKeysEndpoint, revokeKeyEndpoint } from './keys.ts'
+import {
+  acceptInvitationEndpoint,
+  foundFirstGroupEndpoint,
+  inviteEndpoint,
+  listInvitationsEndpoint,
+  readInvitationEndpoint,
+  withdrawInvitationEndpoint,
+} from './invitations.ts'
 import { candidateEndpoints, historyEndpoints } from './records.ts'
-import { signInEndpoint, signOutEndpoint, whoAmIEndpoint } from './session.ts'
+import {
+  chooseGroupEndpoint,
+  listOwnGroupsEndpoint,
+  signInEndpoint,
+  signOutEndpoint,
+  whoAmIEndpoint,
+} from './session.ts'
 
 /** Every endpoint, in the order of the API document. */
 export const CATALOGUE: readonly Endpoint[] = [
@@ -24,7 +51,26 @@ export const CATALOGUE: readonly Endpoint[] = [
   infoEndpoint,
   signInEndpoint,
   whoAmIEndpoint,
+  listOwnGroupsEndpoint,
+  chooseGroupEndpoint,
   signOutEndpoint,
+  readAccountEndpoint,
+  renameAccountEndpoint,
+  changePasswordEndpoint,
+  changeEmailEndpoint,
+  sendVerificationEndpoint,
+  confirmEmailEndpoint,
+  forgottenPasswordEndpoint,
+  resetPasswordEndpoint,
+  listSessionsEndpoint,
+  revokeSessionEndpoint,
+  revokeOtherSessionsEndpoint,
+  listInvitationsEndpoint,
+  inviteEndpoint,
+  withdrawInvitationEndpoint,
+  readInvitationEndpoint,
+  acceptInvitationEndpoint,
+  foundFirstGroupEndpoint,
   ...Object.values(historyEndpoints),
   ...Object.values(candidateEndpoints),
   listEvaluationsEndpoint,

@@ -1,4 +1,4 @@
-import { sessionInfo, signInRequest } from '#core/wire/index'
+import { chooseGroupRequest, ownGroups, sessionInfo, signInRequest } from '#core/wire/index'
 import { endpoint } from './endpoint.ts'
 
 const tag = 'session'
@@ -14,7 +14,7 @@ export const signInEndpoint = endpoint({
   status: 201,
   answer: sessionInfo,
   answerIs: 'Who has signed in, in which group, as what',
-  problems: ['wrong-credentials', 'too-many-attempts'],
+  problems: ['wrong-credentials', 'second-factor-needed', 'wrong-code', 'no-group', 'too-many-attempts'],
 })
 
 export const whoAmIEndpoint = endpoint({
@@ -27,6 +27,32 @@ export const whoAmIEndpoint = endpoint({
   status: 200,
   answer: sessionInfo,
   answerIs: 'Who is signed in, in which group, as what',
+})
+
+export const listOwnGroupsEndpoint = endpoint({
+  id: 'listOwnGroups',
+  method: 'get',
+  path: '/session/groups',
+  tag,
+  summary: 'The groups one belongs to, among which the session can be turned',
+  may: 'keep-account',
+  status: 200,
+  answer: ownGroups,
+  answerIs: 'The groups by name',
+})
+
+export const chooseGroupEndpoint = endpoint({
+  id: 'chooseGroup',
+  method: 'post',
+  path: '/session/group',
+  tag,
+  summary: 'Turn the session to another of one’s groups',
+  may: 'keep-account',
+  body: chooseGroupRequest,
+  status: 200,
+  answer: sessionInfo,
+  answerIs: 'Who is signed in, in which group now, as what there',
+  problems: ['not-found'],
 })
 
 export const signOutEndpoint = endpoint({

@@ -39,11 +39,9 @@ export function problemOf(error: unknown): ProblemError | null {
   if (error instanceof ProblemError) return error
   if (error instanceof InputError) {
     const count = error.faults.length === 1 ? 'One field does' : `${error.faults.length} fields do`
-    return new ProblemError(
-      'invalid-input',
-      `${count} not fit; see the faults. Nothing was saved.`,
-      error.faults,
-    )
+    return new ProblemError('invalid-input', `${count} not fit; see the faults. Nothing was saved.`, {
+      faults: error.faults,
+    })
   }
   if (error instanceof ConvergenceError) {
     return new ProblemError(

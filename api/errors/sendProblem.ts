@@ -15,6 +15,7 @@ export function sendProblem(res: Response, error: ProblemError): void {
     instance: requestIdOf(res),
     ...(error.faults === undefined ? {} : { faults: [...error.faults] }),
   }
+  if (error.retryAfterSeconds !== undefined) res.setHeader('retry-after', error.retryAfterSeconds)
   res.status(status).type('application/problem+json').send(JSON.stringify(document))
 }
 

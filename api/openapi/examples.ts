@@ -19,6 +19,8 @@ const IDS = {
   guestLink: '3bd4e5f6-7081-4293-8dae-2f3a4b5c6d7e',
   key: '19b2c3d4-5e6f-4071-8b9c-0d1e2f3a4b5c',
   auditEntry: '2ac3d4e5-6f70-4182-9cad-1e2f3a4b5c6d',
+  invitation: '1b2c3d4e-5f60-4718-8293-a4b5c6d7e8f9',
+  session: '2c3d4e5f-6071-4829-93a4-b5c6d7e8f90a',
   evaluation: 'f719dbe3-4062-485a-8fb1-ad9e8f706152',
 }
 const AT = '2026-10-01T09:20:00.000Z'
@@ -176,6 +178,83 @@ function evaluationExamples(
   }
 }
 
+const account = {
+  ...session.user,
+  emailVerified: true,
+  hasPassword: true,
+  createdAt: AT,
+}
+const invitation = {
+  id: IDS.invitation,
+  email: 'ida@larchvalley.example',
+  role: 'reader',
+  invitedBy: person,
+  createdAt: AT,
+  expiresAt: '2026-10-08T09:20:00.000Z',
+  state: 'open',
+}
+const token = 'x9Qm3vT0S1eKf4bN7cRwYz2uHj5gLp8dA6iXoVtE1sGkMnBqZrCfWyUhJlPaDxOi'
+const password = 'three or four words'
+const newPassword = 'four other words here'
+
+const accountExamples: Record<string, EndpointExample> = {
+  listOwnGroups: { answer: { items: [{ id: IDS.group, name: session.group.name, role: session.role }] } },
+  chooseGroup: { body: { groupId: IDS.group }, answer: session },
+  readAccount: { answer: account },
+  renameAccount: { body: { name: 'Mateo Adeyemi' }, answer: account },
+  changePassword: { body: { currentPassword: password, newPassword } },
+  changeEmail: { body: { email: 'mateo@institute.example', currentPassword: password } },
+  confirmEmail: { body: { token } },
+  forgotPassword: { body: { email: session.user.email } },
+  resetPassword: { body: { token, newPassword } },
+  listOwnSessions: {
+    answer: {
+      items: [
+        {
+          id: IDS.session,
+          current: true,
+          group: session.group.name,
+          userAgent: 'Mozilla/5.0 (X11; Linux x86_64; rv:140.0) Gecko/20100101 Firefox/140.0',
+          address: '192.0.2.7',
+          createdAt: AT,
+          lastUsedAt: AT,
+          expiresAt: session.expiresAt,
+        },
+      ],
+    },
+  },
+  listInvitations: { answer: { items: [invitation], next: null } },
+  invite: { body: { email: invitation.email, role: invitation.role }, answer: invitation },
+  readInvitation: {
+    body: { token },
+    answer: {
+      email: invitation.email,
+      role: invitation.role,
+      groupName: session.group.name,
+      inviterName: person.name,
+      hasAccount: false,
+    },
+  },
+  acceptInvitation: {
+    body: { token, name: 'Ida Lindqvist', password },
+    answer: {
+      ...session,
+      user: { id: IDS.user, name: 'Ida Lindqvist', email: invitation.email },
+      role: 'reader',
+    },
+  },
+  foundFirstGroup: {
+    body: {
+      token,
+      groupName: session.group.name,
+      name: person.name,
+      email: session.user.email,
+      password,
+    },
+    answer: { ...session, role: 'lead', group: { ...session.group, baselineRevisionId: null } },
+  },
+}
+
 /** Examples by the id of their endpoint. */
 export function examples(): Record<string, EndpointExample> {
   const { history, candidate } = parseInput(abundanceRequest, {
@@ -185,7 +264,8 @@ export function examples(): Record<string, EndpointExample> {
   const rowsAsked = { history: historyWritten, temperaturesGeV: [100, 1, 0.15, 0.001] }
   return {
     health: { answer: { status: 'ok' } },
-    info: { answer: { coreVersion: CORE_VERSION, demo: false, demoSignIns: [] } },
+    info: { answer: { coreVersion: CORE_VERSION, awaitsFirstGroup: false, demo: false, demoSignIns: [] } },
+    ...accountExamples,
     signIn: { body: { email: session.user.email, password: 'three or four words' }, answer: session },
     whoAmI: { answer: session },
     ...recordExamples('history', 'The 2018 fit', IDS.history, IDS.historyRevision, historyWritten, history),

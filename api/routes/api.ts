@@ -3,19 +3,28 @@ import express from 'express'
 import type { Router } from 'express'
 import type { AppDependencies } from '../dependencies.ts'
 import { notFound } from '../errors/problemError.ts'
+import { mailQueue } from '../mail/mailQueue.ts'
 import { sameOrigin } from '../middleware/sameOrigin.ts'
 import { findCaller } from '../middleware/caller.ts'
 import { GUEST_OPENINGS_PER_MINUTE, addressLimit, requestLimit } from '../middleware/requestLimit.ts'
 import { sessionCookie } from '../middleware/sessionCookie.ts'
-import { signInLimit } from '../middleware/signInLimit.ts'
+import { visitors } from '../middleware/visitor.ts'
 import { apiDocument } from '../openapi/document.ts'
+import { sealer } from '../secrets/sealer.ts'
+import { accountService } from '../services/accounts.ts'
+import { attemptCounter } from '../services/attempts.ts'
 import { auditService } from '../services/audit.ts'
 import { evaluationService } from '../services/evaluations.ts'
 import { guestLinkService } from '../services/guestLinks.ts'
+import { firstGroupService } from '../services/firstGroup.ts'
+import { invitationService } from '../services/invitations.ts'
 import { keyService } from '../services/keys.ts'
+import { knownDevices } from '../services/knownDevices.ts'
+import { linksFrom } from '../services/links.ts'
 import { candidateService, historyService } from '../services/records.ts'
 import { sessionService } from '../services/sessions.ts'
 import { sessionTokens } from '../services/token.ts'
+import { accountRoutes } from './account.ts'
 import { auditRoutes } from './audit.ts'
 import { candidateRoutes } from './candidates.ts'
 import { computeRoutes } from './compute.ts'
@@ -24,20 +33,39 @@ import { guestLinkRoutes } from './guestLinks.ts'
 import { historyRoutes } from './histories.ts'
 import { infoRoutes } from './info.ts'
 import { keyRoutes } from './keys.ts'
+import { invitationRoutes } from './invitations.ts'
 import { sessionRoutes } from './session.ts'
 
 /** Everything below /api. */
 export function apiRoutes(dependencies: AppDependencies): Router {
-  const { db, publicUrl, sessionSecret, demoSignIns, signInLimits, requestsPerMinute } = dependencies
-  const cookie = sessionCookie(publicUrl?.protocol === 'https:')
-  const sessions = sessionService(db, sessionTokens(sessionSecret))
+  const { db, queue, publicUrl, sessionSecret, demoSignIns, attemptLimits, requestsPerMinute, origin } =
+    dependencies
+  const https = publicUrl?.protocol === 'https:'
+  const cookie = sessionCookie(https)
+  const entrance = visitors(cookie, https)
+  const seals = sealer(sessionSecret)
+  const mail = mailQueue(queue, seals)
+  const links = linksFrom(origin)
+  const attempts = attemptCounter(db)
+  const sessions = sessionService({
+    db,
+    tokens: sessionTokens(sessionSecret),
+    attempts,
+    limits: attemptLimits,
+    devices: knownDevices(sessionSecret),
+  })
+  const accounts = accountService({ db, queue, sealer: seals, mail, links, attempts })
+  const invitations = invitationService({ db, mail, links, attempts, sessions })
+  const firstGroup = firstGroupService({ db, mail, links, sessions })
 
   const v1 = express.Router()
   const keys = keyService(db)
   v1.use(cookieParser(), findCaller(cookie, { session: sessions.find, key: keys.find }))
   v1.use(requestLimit(requestsPerMinute))
   infoRoutes(v1, db, demoSignIns)
-  sessionRoutes(v1, sessions, cookie, signInLimit(signInLimits))
+  sessionRoutes(v1, sessions, cookie, entrance)
+  accountRoutes(v1, accounts, sessions, entrance)
+  invitationRoutes(v1, invitations, firstGroup, entrance)
   historyRoutes(v1, historyService(db))
   candidateRoutes(v1, candidateService(db))
   evaluationRoutes(v1, evaluationService(db))

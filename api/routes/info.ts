@@ -1,6 +1,7 @@
 import { CORE_VERSION } from '#core/index'
 import type { PublicInfo } from '#core/wire/index'
 import { ping } from '#db/database'
+import { awaitsFirstGroup } from '#db/queries/firstGroup'
 import type { Database } from '#db/database'
 import type { Router } from 'express'
 import { healthEndpoint, infoEndpoint } from '../endpoints/info.ts'
@@ -22,6 +23,7 @@ export function infoRoutes(
 
   mount(router, infoEndpoint, async () => ({
     coreVersion: CORE_VERSION,
+    awaitsFirstGroup: await awaitsFirstGroup(db),
     demo: demoSignIns !== null,
     demoSignIns: demoSignIns ?? [],
   }))

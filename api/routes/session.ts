@@ -1,7 +1,14 @@
-import type { RequestHandler, Router } from 'express'
-import { signInEndpoint, signOutEndpoint, whoAmIEndpoint } from '../endpoints/session.ts'
-import { callerOf, originOf, requireCaller } from '../middleware/caller.ts'
+import type { Router } from 'express'
+import {
+  chooseGroupEndpoint,
+  listOwnGroupsEndpoint,
+  signInEndpoint,
+  signOutEndpoint,
+  whoAmIEndpoint,
+} from '../endpoints/session.ts'
+import { callerOf, requireCaller } from '../middleware/caller.ts'
 import type { SessionCookie } from '../middleware/sessionCookie.ts'
+import type { Visitors } from '../middleware/visitor.ts'
 import { sessionInfoOf } from '../services/sessions.ts'
 import type { SessionService } from '../services/sessions.ts'
 import { mount } from './mount.ts'
@@ -10,20 +17,21 @@ export function sessionRoutes(
   router: Router,
   sessions: SessionService,
   cookie: SessionCookie,
-  limits: RequestHandler[],
+  visitors: Visitors,
 ): void {
-  mount(
-    router,
-    signInEndpoint,
-    async ({ body, req, res }) => {
-      const { info, token, expiresAt } = await sessions.signIn(body.email, body.password, originOf(req, res))
-      cookie.set(res, token, expiresAt)
-      return info
-    },
-    limits,
+  mount(router, signInEndpoint, async ({ body, req, res }) =>
+    visitors.enter(res, await sessions.signIn(body, visitors.of(req, res))),
   )
 
   mount(router, whoAmIEndpoint, async ({ res }) => sessionInfoOf(requireCaller(res)))
+
+  mount(router, listOwnGroupsEndpoint, async ({ res }) => ({
+    items: await sessions.groups(requireCaller(res)),
+  }))
+
+  mount(router, chooseGroupEndpoint, ({ body, res }) =>
+    sessions.chooseGroup(requireCaller(res), body.groupId),
+  )
 
   mount(router, signOutEndpoint, async ({ res }) => {
     const caller = callerOf(res)

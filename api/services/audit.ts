@@ -3,7 +3,7 @@ import { withGroup } from '#db/database'
 import type { Database, GroupTransaction } from '#db/database'
 import { insertAuditEntry, listAuditEntries } from '#db/queries/auditEntries'
 import type { AuditDetail, StoredAuditEntry } from '#db/queries/auditEntries'
-import type { Caller } from '../middleware/caller.ts'
+import type { Caller, RequestOrigin } from '../middleware/caller.ts'
 import { pageAnswer, pageRequest } from './cursor.ts'
 
 /** What is written into the log: a kind of record, and what was done to it. */
@@ -19,11 +19,28 @@ export type AuditAction =
   | 'guest-link.revoke'
   | 'session.open'
   | 'session.close'
+  | 'session.turn'
+  | 'session.end'
+  | 'account.rename'
+  | 'account.password'
+  | 'account.email'
+  | 'invitation.create'
+  | 'invitation.withdraw'
+  | 'invitation.accept'
+  | 'group.create'
+
+/** What the log has to know of who did it. */
+export interface AuditedCaller {
+  user: { id: string }
+  group: { id: string }
+  key: { id: string } | null
+  from: RequestOrigin
+}
 
 /** Notes what `caller` did, in the transaction that does it: neither stands without the other. */
 export const audit = (
   tx: GroupTransaction,
-  caller: Pick<Caller, 'user' | 'group' | 'key' | 'from'>,
+  caller: AuditedCaller,
   action: AuditAction,
   subjectId: string | null,
   detail: AuditDetail = {},

@@ -1,4 +1,5 @@
 /** Everything that crosses a boundary: zod schemas, their types, and how a bad input is reported. */
+export * from './accounts.ts'
 export * from './annihilation.ts'
 export * from './attribution.ts'
 export * from './audit.ts'

@@ -37,6 +37,7 @@ export type SessionInfo = z.output<typeof sessionInfo>
 export const publicInfo = z
   .object({
     coreVersion: z.string(),
+    awaitsFirstGroup: z.boolean().describe('Whether the first group has still to be made'),
     demo: z.boolean(),
     demoSignIns: z.array(z.object({ name: z.string(), role, email: z.string(), password: z.string() })),
   })

@@ -7,6 +7,8 @@ export const QUEUE_SCHEMA = 'pgboss'
 export interface JobData {
   /** A mail to be sent: a sealed `QueuedMail`. */
   mail: { sealed: string }
+  /** What an account is asked for, sealed, answered by mail alone. */
+  'account-requests': { sealed: string }
   /** Removal of what has expired. */
   housekeeping: Record<string, never>
 }
@@ -39,6 +41,7 @@ export const QUEUES: readonly { name: string; options: QueueOptions }[] = [
       deadLetter: UNDELIVERED,
     },
   },
+  { name: 'account-requests', options: { expireInSeconds: 60, retryLimit: 100, retryDelay: 10 } },
   { name: 'housekeeping', options: { expireInSeconds: 300, retryLimit: 3, retryDelay: 60 } },
 ]
 

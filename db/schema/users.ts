@@ -1,6 +1,6 @@
 import { sql } from 'drizzle-orm'
 import { check, pgTable, text } from 'drizzle-orm/pg-core'
-import { createdAt, primaryId } from './columns.ts'
+import { createdAt, moment, primaryId } from './columns.ts'
 
 /** A person, in however many groups. The server's role may read name and e-mail, never the password's hash. */
 export const users = pgTable(
@@ -9,7 +9,10 @@ export const users = pgTable(
     id: primaryId(),
     email: text('email').notNull().unique('users_email_unique'),
     name: text('name').notNull(),
-    passwordHash: text('password_hash').notNull(),
+    /** Null when its owner signs in elsewhere. */
+    passwordHash: text('password_hash'),
+    /** When a link sent to the address was opened; null before. */
+    emailVerifiedAt: moment('email_verified_at'),
     createdAt: createdAt(),
   },
   (t) => [

@@ -19,7 +19,7 @@ export async function seedGroup(tx: GroupTransaction, group: DemoGroup): Promise
   const people = await Promise.all(
     group.people.map(async ({ email, name, password, role }) => ({
       role,
-      account: { email, name, passwordHash: await hashPassword(password) },
+      account: { email, name, passwordHash: await hashPassword(password), emailVerifiedAt: new Date() },
     })),
   )
   const accounts = await tx

@@ -24,13 +24,22 @@ async function endGently(child, exited) {
   await exited
 }
 
+/** What Emberline's own server says before, on a database without a group: where the first is made. */
+const FIRST_GROUP = /^there is no group yet; make the first at (http\S+)$/m
+
+/** The line that tells whoever started the server how to make the first group; none when there is one. */
+export function firstGroupLines(said) {
+  const [, link] = FIRST_GROUP.exec(said) ?? []
+  return link === undefined ? [] : [`\nThere is no group yet. Make the first, once, at\n  ${link}`]
+}
+
 /** What Emberline's own server says once it listens. */
 export const LISTENING = /^listening on (http\S+)$/m
 
 /**
  * Starts a server: `args` are those of node. Its output goes to `logFile`, or to standard output if there is none.
- * Resolves, once the output matches `ready`, to { address, exited }: the pattern's first group, and a promise
- * that resolves when the server is no more.
+ * Resolves, once the output matches `ready`, to { address, said, exited }: the pattern's first group, the output so
+ * far, and a promise that resolves when the server is no more.
  * It stops when this process ends; should this process be killed, the channel between them closes and it stops too.
  */
 export async function startServer({ args, environment, ready, logFile }) {
@@ -56,5 +65,5 @@ export async function startServer({ args, environment, ready, logFile }) {
   })
   const first = await Promise.race([address, exited.then(() => null)])
   if (first === null) throw new Trouble(`The server ended before it was ready. It said:\n${last.trim()}`)
-  return { address: first, exited }
+  return { address: first, said: last, exited }
 }

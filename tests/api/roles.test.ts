@@ -27,7 +27,7 @@ const WRITES = [
   'revokeGuestLink',
 ]
 
-const FOR_LEADS = ['listAuditEntries']
+const FOR_LEADS = ['listAuditEntries', 'listInvitations', 'invite', 'withdrawInvitation']
 
 const allowed = (role: string, id: string): boolean =>
   FOR_LEADS.includes(id) ? role === 'lead' : role !== 'reader' || !WRITES.includes(id)

@@ -14,8 +14,9 @@ afterAll(async () => {
   await database.drop()
 })
 
-const TENANT_TABLES = [
+const TABLES = [
   'api_keys',
+  'attempts',
   'audit_entries',
   'candidate_revisions',
   'candidates',
@@ -24,7 +25,9 @@ const TENANT_TABLES = [
   'guest_links',
   'histories',
   'history_revisions',
+  'invitations',
   'memberships',
+  'one_time_tokens',
   'sessions',
   'users',
 ]
@@ -78,7 +81,14 @@ describe('the server’s role', () => {
       'guest_links.revoked_at',
       'histories.latest_number',
       'histories.updated_at',
+      'invitations.withdrawn_at',
+      'one_time_tokens.used_at',
+      'sessions.group_id',
       'sessions.revoked_at',
+      'users.email',
+      'users.email_verified_at',
+      'users.name',
+      'users.password_hash',
     ])
   })
 
@@ -86,8 +96,10 @@ describe('the server’s role', () => {
     await expect(server.query('select password_hash from users')).rejects.toThrow('permission denied')
   })
 
-  it('cannot read the hash of a key’s secret, nor give a key a rate of its own', async () => {
+  it('cannot read the hash of any secret, nor give a key a rate of its own', async () => {
     await expect(server.query('select secret_hash from api_keys')).rejects.toThrow('permission denied')
+    await expect(server.query('select secret_hash from invitations')).rejects.toThrow('permission denied')
+    await expect(server.query('select secret_hash from one_time_tokens')).rejects.toThrow('permission denied')
     await expect(server.query('select token_hash from guest_links')).rejects.toThrow('permission denied')
     await expect(server.query('update api_keys set requests_per_minute = 1')).rejects.toThrow(
       'permission denied',
@@ -105,11 +117,11 @@ describe('row-level security', () => {
       `select relname from pg_class where relkind = 'r' and relnamespace = 'public'::regnamespace
          and relrowsecurity and relforcerowsecurity order by relname`,
     )
-    expect(rows.map(({ relname }) => relname)).toEqual(TENANT_TABLES)
+    expect(rows.map(({ relname }) => relname)).toEqual(TABLES)
     const all = await server.query(
       "select 1 from pg_class where relkind = 'r' and relnamespace = 'public'::regnamespace",
     )
-    expect(all.rowCount).toBe(TENANT_TABLES.length)
+    expect(all.rowCount).toBe(TABLES.length)
   })
 
   it('every function that runs as the owner has a fixed search path and is closed to the public', async () => {
@@ -118,9 +130,18 @@ describe('row-level security', () => {
        from pg_proc where prosecdef and pronamespace = 'public'::regnamespace order by proname`,
     )
     expect(rows.map(({ proname }) => proname)).toEqual([
+      'accept_invitation',
       'account_for_sign_in',
+      'awaits_first_group',
+      'forgive_attempt',
+      'found_first_group',
+      'issue_first_group_token',
+      'live_invitation',
+      'live_token',
       'newest_migration',
+      'own_password_hash',
       'remove_expired',
+      'take_attempt',
       'use_api_key',
       'use_guest_link',
       'use_session',

@@ -39,7 +39,7 @@ const setGroup = (client: pg.Client, id: string) =>
 const TABLES: [table: string, group: string, columns: string, each: number][] = [
   ['groups', 'id', '*', 1],
   ['memberships', 'group_id', '*', 3],
-  ['sessions', 'group_id', '*', 1],
+  ['invitations', 'group_id', 'id, group_id, email', 1],
   ['histories', 'group_id', '*', 1],
   ['history_revisions', 'group_id', '*', 1],
   ['candidates', 'group_id', '*', 1],

@@ -1,8 +1,11 @@
 import { CATALOGUE } from '#api/endpoints/catalogue'
+import { sessionInfo } from '#core/wire/index'
+import type { SessionInfo } from '#core/wire/index'
 import type { Endpoint } from '#api/endpoints/endpoint'
 import { examples } from '#api/openapi/examples'
-import type { Test } from 'supertest'
+import type { Response } from 'supertest'
 import type TestAgent from 'supertest/lib/agent.js'
+import { PASSWORD } from '../../db/support/groups.ts'
 import type { saveOneOfEach } from '../../db/support/records.ts'
 
 /** Ids of things that exist, to put in the place of the made-up ones of the examples. */
@@ -14,26 +17,51 @@ export const endpointsOfMembers = CATALOGUE.filter(({ may }) => may !== 'anyone'
 export const addressOf = (endpoint: Endpoint, id = ''): string =>
   `/api/v1${endpoint.path.replace('{id}', id)}`
 
-function recordOf(endpoint: Endpoint, saved: Saved): { id: string; revisionId?: string } {
-  if (endpoint.tag === 'keys') return { id: saved.keyId }
-  if (endpoint.tag === 'guest-links') return { id: saved.guestLinkId }
-  if (endpoint.tag === 'evaluations') return { id: saved.evaluationId }
-  const { recordId, revisionId } = endpoint.tag === 'histories' ? saved.history : saved.candidate
-  return { id: recordId, revisionId }
+const whoIs = async (agent: TestAgent): Promise<SessionInfo> =>
+  sessionInfo.parse((await agent.get('/api/v1/session')).body)
+
+/** Signs the agent in once more, and returns the id of the session it had. */
+async function earlierSession(agent: TestAgent): Promise<string> {
+  const { user } = await whoIs(agent)
+  await agent.post('/api/v1/session').send({ email: user.email, password: PASSWORD })
+  const { body } = await agent.get('/api/v1/account/sessions')
+  const other = (body as { items: { id: string; current: boolean }[] }).items.find(({ current }) => !current)
+  return other?.id ?? 'no other session'
 }
 
-/** Calls an endpoint as its documented example does, with ids that exist. */
-export function callByExample(agent: TestAgent, endpoint: Endpoint, saved: Saved): Test {
-  const { id, revisionId } = recordOf(endpoint, saved)
-  const call = agent[endpoint.method](addressOf(endpoint, id))
+async function idFor(agent: TestAgent, endpoint: Endpoint, saved: Saved): Promise<string> {
+  switch (endpoint.tag) {
+    case 'evaluations':
+      return saved.evaluationId
+    case 'histories':
+      return saved.history.recordId
+    case 'keys':
+      return saved.keyId
+    case 'guest-links':
+      return saved.guestLinkId
+    case 'invitations':
+      return saved.invitationId
+    case 'account':
+      return endpoint.path.includes('{id}') ? earlierSession(agent) : ''
+    default:
+      return saved.candidate.recordId
+  }
+}
+
+/** Calls an endpoint as its documented example does, with ids and passwords that exist. */
+export async function callByExample(agent: TestAgent, endpoint: Endpoint, saved: Saved): Promise<Response> {
+  const call = agent[endpoint.method](addressOf(endpoint, await idFor(agent, endpoint, saved)))
   const body = examples()[endpoint.id]?.body
   if (body === undefined) return call
-  const ids: Record<string, unknown> = {
-    parentId: revisionId,
+  const real: Record<string, unknown> = {
+    parentId: endpoint.tag === 'histories' ? saved.history.revisionId : saved.candidate.revisionId,
     historyRevisionId: saved.history.revisionId,
     candidateRevisionId: saved.candidate.revisionId,
     subjectId: saved.evaluationId,
+    groupId: saved.groupId,
+    currentPassword: PASSWORD,
+    newPassword: PASSWORD,
   }
-  const real = Object.entries(body as object).map(([key, value]) => [key, ids[key] ?? value] as const)
-  return call.send(Object.fromEntries(real))
+  const entries = Object.entries(body as object).map(([key, value]) => [key, real[key] ?? value] as const)
+  return call.send(Object.fromEntries(entries))
 }

@@ -3,6 +3,13 @@ import { jobQueue } from '#db/queue/jobQueue'
 import { createApp } from '#api/app'
 import type { AppDependencies } from '#api/dependencies'
 import { createLogger } from '#api/logger'
+import { answerAccountRequest } from '#api/jobs/accountRequests'
+import type { Mail } from '#api/mail/mail'
+import { mailQueue } from '#api/mail/mailQueue'
+import { sealer } from '#api/secrets/sealer'
+import type { AccountRequest } from '#api/services/accounts'
+import { attemptCounter } from '#api/services/attempts'
+import { linksFrom } from '#api/services/links'
 import type { Express } from 'express'
 import type pg from 'pg'
 import request from 'supertest'
@@ -13,6 +20,9 @@ import { connectOwner } from '../../db/support/owner.ts'
 import { freshDatabase } from '../../support/database.ts'
 
 export const SESSION_SECRET = 'a secret for tests only, 32 characters or more'
+
+/** Where the links in mails lead. */
+export const ORIGIN = 'http://emberline.test'
 
 export interface Harness {
   app: Express
@@ -25,6 +35,8 @@ export interface Harness {
   /** Another app on the same database, with other dependencies. */
   appWith(changed: Partial<AppDependencies>): Express
   signIn(member: Member): Promise<TestAgent>
+  /** The mails queued for an address so far, newest last; what was asked for without an answer is done first. */
+  mailsTo(address: string): Promise<Mail[]>
   stop(): Promise<void>
 }
 
@@ -44,11 +56,32 @@ export async function startHarness(): Promise<Harness> {
       mailSink: null,
       webRoot: 'no-such-folder',
       demoSignIns: null,
-      signInLimits: { perAddress: 100, perAccount: 100 },
       requestsPerMinute: 10_000,
+      attemptLimits: { perAddress: 1000, perAccount: 1000 },
+      origin: () => ORIGIN,
       ...changed,
     })
   const app = appWith({})
+  const { seal, open } = sealer(SESSION_SECRET)
+  const sealedIn = async (name: string): Promise<{ id: string; sealed: string }[]> => {
+    const { rows } = await owner.query<{ id: string; sealed: string }>(
+      "select id, data->>'sealed' as sealed from pgboss.job where name = $1 and state = 'created' order by created_on",
+      [name],
+    )
+    return rows
+  }
+  const answerRequests = async (): Promise<void> => {
+    const parts = {
+      db,
+      mail: mailQueue(queue, { seal, open }),
+      links: linksFrom(() => ORIGIN),
+      attempts: attemptCounter(db),
+    }
+    for (const { id, sealed } of await sealedIn('account-requests')) {
+      await answerAccountRequest(parts, JSON.parse(await open(sealed)) as AccountRequest)
+      await owner.query("update pgboss.job set state = 'completed' where id = $1", [id])
+    }
+  }
   return {
     app,
     serverUrl: database.serverUrl,
@@ -58,6 +91,11 @@ export async function startHarness(): Promise<Harness> {
     birch: await makeGroup(owner, 'Birch'),
     appWith,
     signIn: (member) => signInTo(app, member),
+    async mailsTo(address) {
+      await answerRequests()
+      const mails = await Promise.all((await sealedIn('mail')).map(({ sealed }) => open(sealed)))
+      return mails.map((text) => JSON.parse(text) as Mail).filter(({ to }) => to === address)
+    },
     async stop() {
       await close()
       await owner.end()

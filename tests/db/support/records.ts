@@ -1,4 +1,4 @@
-import { randomBytes } from 'node:crypto'
+import { randomBytes, randomUUID } from 'node:crypto'
 import { computeAbundance } from '#core/index'
 import { candidateInput, digestOf, historyInput } from '#core/wire/index'
 import { connect, withGroup } from '#db/database'
@@ -6,6 +6,7 @@ import { candidateQueries } from '#db/queries/candidates'
 import { insertEvaluation } from '#db/queries/evaluations'
 import { insertGuestLink } from '#db/queries/guestLinks'
 import { historyQueries } from '#db/queries/histories'
+import { insertInvitation } from '#db/queries/invitations'
 import { insertKey } from '#db/queries/apiKeys'
 import type { GroupTransaction } from '#db/database'
 import { insertAuditEntry } from '#db/queries/auditEntries'
@@ -58,7 +59,7 @@ async function saveKey(tx: GroupTransaction, group: TestGroup, holder: Member): 
   return id
 }
 
-/** Stores a history, a candidate and an evaluation of the two, a key and a guest link, through the server's own role and queries. */
+/** Stores a history, a candidate, an evaluation of the two, a key, a guest link and an invitation, through the server's own role and queries. */
 export async function saveOneOfEach(serverUrl: string, group: TestGroup, keyHolder = group.reader) {
   const { db, close } = connect(serverUrl, () => undefined)
   const input = { history, candidate }
@@ -94,7 +95,24 @@ export async function saveOneOfEach(serverUrl: string, group: TestGroup, keyHold
         createdBy: (keyHolder.role === 'reader' ? author : keyHolder).id,
         expiresAt: null,
       })
-      return { history: savedHistory, candidate: savedCandidate, evaluationId, keyId, guestLinkId }
+      const { id: invitationId } = await insertInvitation(tx, {
+        id: randomUUID(),
+        groupId: group.id,
+        email: `guest@${group.name.toLowerCase()}.example`,
+        role: 'reader',
+        invitedBy: group.lead.id,
+        secretHash: '0'.repeat(64),
+        expiresAt: new Date(Date.now() + 3_600_000),
+      })
+      return {
+        groupId: group.id,
+        history: savedHistory,
+        candidate: savedCandidate,
+        evaluationId,
+        keyId,
+        guestLinkId,
+        invitationId,
+      }
     })
   } finally {
     await close()

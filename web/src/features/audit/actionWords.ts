@@ -11,6 +11,15 @@ const ACTIONS: Record<string, string> = {
   'guest-link.revoke': 'revoked a guest link',
   'session.open': 'signed in',
   'session.close': 'signed out',
+  'session.turn': 'turned to this group',
+  'session.end': 'ended a session of theirs',
+  'account.rename': 'changed their name',
+  'account.password': 'changed their password',
+  'account.email': 'changed their address',
+  'invitation.create': 'invited somebody',
+  'invitation.withdraw': 'withdrew an invitation',
+  'invitation.accept': 'accepted an invitation',
+  'group.create': 'made the group',
 }
 
 export const actionWords = (action: string): string => ACTIONS[action] ?? action
@@ -24,4 +33,6 @@ export const KINDS = [
   { value: 'key', label: 'API keys' },
   { value: 'guest-link', label: 'guest links' },
   { value: 'session', label: 'signing in and out' },
+  { value: 'account', label: 'accounts' },
+  { value: 'invitation', label: 'invitations' },
 ] as const
