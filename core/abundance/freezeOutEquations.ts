@@ -43,6 +43,42 @@ export function followingYield(state: AnnihilatingState, lnX: number): number {
   return now + Math.log1p(Math.max(0, Math.min(lag, 1)))
 }
 
+/** Half the distance in ln x over which a slope is taken, and the orders in H/Γ to which a curve follows equilibrium. */
+const NEARBY = 1e-3
+const ORDERS = 3
+
+/** The lead δ of ln Z over the balance that makes ln Z change by `slope` per ln x: k [Z_s (e^−δ − e^δ) + η (e^−δ − 1)] = slope. */
+function leadFor(state: AnnihilatingState, lnSteady: number, slope: number): number {
+  const { strength, asymmetry } = state
+  const wanted = -slope / strength
+  const steady = Math.exp(lnSteady)
+  let lead = 0
+  for (let i = 0; i < 3; i++) {
+    const missing = wanted - 2 * steady * Math.sinh(lead) + asymmetry * Math.expm1(-lead)
+    lead += missing / (2 * steady * Math.cosh(lead) + asymmetry * Math.exp(-lead))
+  }
+  return Math.max(-1, Math.min(lead, 1))
+}
+
+/** ln Z that leads the balance by as much as the slope of the order before needs; the balance itself to order zero. */
+function followingTo(order: number, state: AnnihilatingState, lnX: number): number {
+  const after = order > 0 ? followingTo(order - 1, state, lnX + NEARBY) : 0
+  const before = order > 0 ? followingTo(order - 1, state, lnX - NEARBY) : 0
+  state.moveTo(lnX)
+  const balance = steadyYield(state)
+  return order > 0 ? balance + leadFor(state, balance, (after - before) / (2 * NEARBY)) : balance
+}
+
+/**
+ * The same for a curve, to third order, so that it goes over smoothly into the solution. Where the bath steps nearby there is no
+ * slope, and the balance is given.
+ */
+export function drawnYield(state: AnnihilatingState, lnX: number): number {
+  const reach = ORDERS * NEARBY
+  const stepsNearby = state.breaksBetween(lnX - reach, lnX + reach).length > 0
+  return followingTo(stepsNearby ? 0 : ORDERS, state, lnX)
+}
+
 /** ln Z at which gain and loss balance: Z (Z + η) = Z_eq² + P/k. */
 export function steadyYield(state: AnnihilatingState): number {
   const { asymmetry, production, strength, lnEquilibrium } = state

@@ -18,6 +18,11 @@ export class Sampler {
     this.samples = samples
   }
 
+  /** Whether there is a curve to fill in. */
+  get wanted(): boolean {
+    return this.samples !== null
+  }
+
   /** Fills every sample not yet filled with ln x ≤ `to`. */
   upTo(to: number, lnYieldAt: (lnX: number) => number): void {
     const { samples } = this
