@@ -16,7 +16,17 @@ const recordName = z.string().trim().min(1).max(120)
 const note = z.string().trim().max(2000)
 
 export const signInRequest = z
-  .strictObject({ email: z.email().max(254), password: z.string().min(1).max(1024) })
+  .strictObject({
+    email: z.email().max(254),
+    password: z.string().min(1).max(1024),
+    code: z
+      .string()
+      .trim()
+      .min(1)
+      .max(40)
+      .optional()
+      .describe('Of the second factor, or a recovery code; when the account has one'),
+  })
   .meta({ id: 'SignInRequest' })
 
 export const person = z.object({ id, name: z.string() }).meta({ id: 'Person' })

@@ -29,7 +29,8 @@ export const infoQuery = queryOptions({
   staleTime: Infinity,
 })
 
-export const signIn = (email: string, password: string): Promise<SessionInfo> =>
-  api('POST', '/session', { email, password })
+/** `code` is that of the second factor, once it has been asked for. */
+export const signIn = (email: string, password: string, code?: string): Promise<SessionInfo> =>
+  api('POST', '/session', code === undefined ? { email, password } : { email, password, code })
 
 export const signOut = (): Promise<void> => api('DELETE', '/session')

@@ -53,6 +53,12 @@ export function AccountMenu({ session }: { session: KnownSession }) {
             </span>
           </p>
           <nav aria-label="Account" className="grid w-full justify-items-start gap-1">
+            <Link to="/account" className="link" onClick={close}>
+              Account
+            </Link>
+            <Link to="/choose-group" className="link" onClick={close}>
+              Another group
+            </Link>
             <Link to="/keys" className="link" onClick={close}>
               API keys
             </Link>
@@ -60,9 +66,14 @@ export function AccountMenu({ session }: { session: KnownSession }) {
               API reference
             </Link>
             {session.role === 'lead' ? (
-              <Link to="/audit" className="link" onClick={close}>
-                Audit log
-              </Link>
+              <>
+                <Link to="/invitations" className="link" onClick={close}>
+                  Invitations
+                </Link>
+                <Link to="/audit" className="link" onClick={close}>
+                  Audit log
+                </Link>
+              </>
             ) : null}
           </nav>
           <ThemeSwitch />

@@ -25,8 +25,23 @@ const page = (path: string, load: () => Promise<PageModule>): RouteObject => ({
   ErrorBoundary: PageError,
 })
 
+/** A page that needs no session. */
+const stranger = (path: string, load: () => Promise<PageModule>): RouteObject => ({
+  ...page(path, load),
+  HydrateFallback: Loading,
+})
+
 export const router = createBrowserRouter([
   { ...page('/sign-in', () => import('../features/session/SignInPage.tsx')), HydrateFallback: Loading },
+  stranger('/forgotten-password', () => import('../features/session/ForgottenPasswordPage.tsx')),
+  stranger('/reset-password', () => import('../features/session/ResetPasswordPage.tsx')),
+  stranger('/confirm-email', () => import('../features/session/ConfirmEmailPage.tsx')),
+  stranger('/invitation', () => import('../features/session/InvitationPage.tsx')),
+  stranger('/first-group', () => import('../features/session/FirstGroupPage.tsx')),
+  {
+    ...stranger('/choose-group', () => import('../features/session/ChooseGroupPage.tsx')),
+    loader: signedIn,
+  },
   { ...page('/guest', () => import('../features/guest/GuestPage.tsx')), HydrateFallback: Loading },
   {
     path: '/',
@@ -43,6 +58,8 @@ export const router = createBrowserRouter([
       page('candidates/:id', () => import('../features/records/CandidatePage.tsx')),
       page('evaluations', () => import('../features/evaluations/EvaluationsPage.tsx')),
       page('evaluations/:id', () => import('../features/evaluations/EvaluationPage.tsx')),
+      page('account', () => import('../features/account/AccountPage.tsx')),
+      page('invitations', () => import('../features/invitations/InvitationsPage.tsx')),
       page('keys', () => import('../features/keys/KeysPage.tsx')),
       page('audit', () => import('../features/audit/AuditPage.tsx')),
       page('reference', () => import('../features/reference/ReferencePage.tsx')),
