@@ -1,12 +1,17 @@
 import {
   account,
+  beginSecondFactorRequest,
   changeEmailRequest,
   changePasswordRequest,
   confirmEmailRequest,
+  confirmSecondFactorRequest,
   forgottenPasswordRequest,
+  newSecondFactor,
   ownSessions,
+  recoveryCodeList,
   renameRequest,
   resetPasswordRequest,
+  secondFactorRequest,
 } from '#core/wire/index'
 import { z } from 'zod'
 import { endpoint } from './endpoint.ts'
@@ -150,4 +155,59 @@ export const resetPasswordEndpoint = endpoint({
   status: 204,
   answerIs: 'The new password holds',
   problems: ['link-not-valid'],
+})
+
+export const beginSecondFactorEndpoint = endpoint({
+  id: 'beginSecondFactor',
+  method: 'post',
+  path: '/account/second-factor',
+  tag,
+  summary: 'Get a secret for one-time codes (RFC 6238); in force once a code of it is confirmed',
+  may,
+  body: beginSecondFactorRequest,
+  status: 200,
+  answer: newSecondFactor,
+  answerIs: 'The secret, told this once',
+  problems: ['second-factor-set', 'too-many-attempts'],
+})
+
+export const confirmSecondFactorEndpoint = endpoint({
+  id: 'confirmSecondFactor',
+  method: 'post',
+  path: '/account/second-factor/confirm',
+  tag,
+  summary: 'Put the second factor in force by a code of it',
+  may,
+  body: confirmSecondFactorRequest,
+  status: 200,
+  answer: recoveryCodeList,
+  answerIs: 'Ten recovery codes, told this once',
+  problems: ['wrong-code', 'too-many-attempts'],
+})
+
+export const giveUpSecondFactorEndpoint = endpoint({
+  id: 'giveUpSecondFactor',
+  method: 'post',
+  path: '/account/second-factor/give-up',
+  tag,
+  summary: 'Give the second factor up, by password and code',
+  may,
+  body: secondFactorRequest,
+  status: 204,
+  answerIs: 'The password alone is asked for from now on',
+  problems: ['wrong-code', 'too-many-attempts'],
+})
+
+export const renewRecoveryCodesEndpoint = endpoint({
+  id: 'renewRecoveryCodes',
+  method: 'post',
+  path: '/account/recovery-codes',
+  tag,
+  summary: 'Get new recovery codes; those of before are void',
+  may,
+  body: secondFactorRequest,
+  status: 200,
+  answer: recoveryCodeList,
+  answerIs: 'Ten recovery codes, told this once',
+  problems: ['wrong-code', 'too-many-attempts'],
 })

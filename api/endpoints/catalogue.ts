@@ -1,5 +1,9 @@
 import { listAuditEndpoint } from './audit.ts'
 import {
+  beginSecondFactorEndpoint,
+  confirmSecondFactorEndpoint,
+  giveUpSecondFactorEndpoint,
+  renewRecoveryCodesEndpoint,
   changeEmailEndpoint,
   changePasswordEndpoint,
   confirmEmailEndpoint,
@@ -65,6 +69,10 @@ export const CATALOGUE: readonly Endpoint[] = [
   listSessionsEndpoint,
   revokeSessionEndpoint,
   revokeOtherSessionsEndpoint,
+  beginSecondFactorEndpoint,
+  confirmSecondFactorEndpoint,
+  giveUpSecondFactorEndpoint,
+  renewRecoveryCodesEndpoint,
   listInvitationsEndpoint,
   inviteEndpoint,
   withdrawInvitationEndpoint,

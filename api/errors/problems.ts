@@ -12,6 +12,7 @@ export const PROBLEMS = {
   'other-site': { status: 403, title: 'The request came from another site' },
   'not-found': { status: 404, title: 'There is nothing here' },
   'guest-link-closed': { status: 404, title: 'This link opens nothing' },
+  'second-factor-set': { status: 409, title: 'There is a second factor already' },
   'stale-parent': { status: 409, title: 'A newer revision was saved meanwhile' },
   'link-not-valid': { status: 410, title: 'This link is not valid any more' },
   'too-large': { status: 413, title: 'The body of the request is too large' },

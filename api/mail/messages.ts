@@ -84,3 +84,15 @@ export const passwordChangedMail = ({ to }: { to: string }): Mail => ({
     },
   ],
 })
+
+export const secondFactorMail = ({ to, inForce }: { to: string; inForce: boolean }): Mail => ({
+  to,
+  subject: inForce ? 'A second factor protects your account' : 'Your second factor was given up',
+  parts: [
+    {
+      text: inForce
+        ? 'From now on a code of your app, or a recovery code, is asked for beside the password of your Emberline account. If that was not you, tell a lead of your group at once.'
+        : 'The password alone opens your Emberline account from now on. If that was not you, change it and tell a lead of your group at once.',
+    },
+  ],
+})

@@ -182,6 +182,7 @@ const account = {
   ...session.user,
   emailVerified: true,
   hasPassword: true,
+  secondFactor: { inForce: true, recoveryCodesLeft: 9 },
   createdAt: AT,
 }
 const invitation = {
@@ -194,6 +195,7 @@ const invitation = {
   state: 'open',
 }
 const token = 'x9Qm3vT0S1eKf4bN7cRwYz2uHj5gLp8dA6iXoVtE1sGkMnBqZrCfWyUhJlPaDxOi'
+const recoveryCodes = ['9x2k-m4tz-0c7w-hq5e', 'v8rn-3jd6-ya1b-pg2s']
 const password = 'three or four words'
 const newPassword = 'four other words here'
 
@@ -207,6 +209,17 @@ const accountExamples: Record<string, EndpointExample> = {
   confirmEmail: { body: { token } },
   forgotPassword: { body: { email: session.user.email } },
   resetPassword: { body: { token, newPassword } },
+  beginSecondFactor: {
+    body: { currentPassword: password },
+    answer: {
+      secret: 'JBSWY3DPEHPK3PXPJBSWY3DPEHPK3PXP',
+      uri: 'otpauth://totp/Emberline:mateo%40larchvalley.example?secret=JBSWY3DPEHPK3PXPJBSWY3DPEHPK3PXP',
+      qrSvg: '<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 45 45"><path d="M4 4h7v7H4z"/></svg>',
+    },
+  },
+  confirmSecondFactor: { body: { code: '492039' }, answer: { recoveryCodes } },
+  giveUpSecondFactor: { body: { currentPassword: password, code: '492039' } },
+  renewRecoveryCodes: { body: { currentPassword: password, code: '492039' }, answer: { recoveryCodes } },
   listOwnSessions: {
     answer: {
       items: [

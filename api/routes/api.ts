@@ -22,6 +22,7 @@ import { keyService } from '../services/keys.ts'
 import { knownDevices } from '../services/knownDevices.ts'
 import { linksFrom } from '../services/links.ts'
 import { candidateService, historyService } from '../services/records.ts'
+import { secondFactorService } from '../services/secondFactor.ts'
 import { sessionService } from '../services/sessions.ts'
 import { sessionTokens } from '../services/token.ts'
 import { accountRoutes } from './account.ts'
@@ -47,15 +48,17 @@ export function apiRoutes(dependencies: AppDependencies): Router {
   const mail = mailQueue(queue, seals)
   const links = linksFrom(origin)
   const attempts = attemptCounter(db)
+  const factors = secondFactorService({ db, sealer: seals, mail, attempts })
   const sessions = sessionService({
     db,
     tokens: sessionTokens(sessionSecret),
     attempts,
     limits: attemptLimits,
     devices: knownDevices(sessionSecret),
+    factors,
   })
-  const accounts = accountService({ db, queue, sealer: seals, mail, links, attempts })
-  const invitations = invitationService({ db, mail, links, attempts, sessions })
+  const accounts = accountService({ db, queue, sealer: seals, mail, links, attempts, factors })
+  const invitations = invitationService({ db, mail, links, attempts, sessions, factors })
   const firstGroup = firstGroupService({ db, mail, links, sessions })
 
   const v1 = express.Router()
@@ -64,7 +67,7 @@ export function apiRoutes(dependencies: AppDependencies): Router {
   v1.use(requestLimit(requestsPerMinute))
   infoRoutes(v1, db, demoSignIns)
   sessionRoutes(v1, sessions, cookie, entrance)
-  accountRoutes(v1, accounts, sessions, entrance)
+  accountRoutes(v1, accounts, factors, sessions, entrance)
   invitationRoutes(v1, invitations, firstGroup, entrance)
   historyRoutes(v1, historyService(db))
   candidateRoutes(v1, candidateService(db))

@@ -21,6 +21,7 @@ import { audit } from './audit.ts'
 import type { AuditAction } from './audit.ts'
 import type { Links } from './links.ts'
 import { requireGoodPassword } from './passwordPolicy.ts'
+import type { SecondFactorService } from './secondFactor.ts'
 import type { Visitor } from './visitor.ts'
 
 const HOUR_MS = 3_600_000
@@ -45,6 +46,7 @@ export interface AccountParts {
   mail: QueueMail
   links: Links
   attempts: Attempts
+  factors: SecondFactorService
 }
 
 /** Keeps a new token of a person in place of those before, and returns what goes into the link. */
@@ -72,23 +74,30 @@ interface PersonalToken {
 const isPersonal = (token: LiveToken): token is LiveToken & PersonalToken =>
   token.purpose !== 'first-group' && token.userId !== null && token.email !== null
 
-const writeAccount = (account: OwnAccount, passwordHash: string | null): Account => ({
+const writeAccount = (
+  account: OwnAccount,
+  passwordHash: string | null,
+  secondFactor: Account['secondFactor'],
+): Account => ({
   id: account.id,
   name: account.name,
   email: account.email,
   emailVerified: account.emailVerifiedAt !== null,
   hasPassword: passwordHash !== null,
+  secondFactor,
   createdAt: account.createdAt.toISOString(),
 })
 
-export function accountService({ db, queue, sealer, mail, links, attempts }: AccountParts) {
+export function accountService({ db, queue, sealer, mail, links, attempts, factors }: AccountParts) {
   const ownTransaction = <T>(caller: Caller, work: (tx: GroupTransaction) => Promise<T>): Promise<T> =>
     withMember(db, caller, work)
 
-  const read = (caller: Caller): Promise<Account> =>
-    ownTransaction(caller, async (tx) =>
-      writeAccount(await readAccount(tx, caller.user.id), await ownPasswordHash(tx)),
+  const read = async (caller: Caller): Promise<Account> => {
+    const secondFactor = await factors.state(caller)
+    return ownTransaction(caller, async (tx) =>
+      writeAccount(await readAccount(tx, caller.user.id), await ownPasswordHash(tx), secondFactor),
     )
+  }
 
   /** A session left open is not enough for what would lock its owner out. */
   const requirePassword = async (caller: Caller, password: string): Promise<void> => {

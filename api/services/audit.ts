@@ -24,6 +24,7 @@ export type AuditAction =
   | 'account.rename'
   | 'account.password'
   | 'account.email'
+  | 'account.second-factor'
   | 'invitation.create'
   | 'invitation.withdraw'
   | 'invitation.accept'

@@ -23,6 +23,7 @@ import { audit } from './audit.ts'
 import { pageAnswer, pageRequest } from './cursor.ts'
 import type { Links } from './links.ts'
 import { requireGoodPassword } from './passwordPolicy.ts'
+import type { SecondFactorService } from './secondFactor.ts'
 import type { SessionService, SignedIn } from './sessions.ts'
 import type { Visitor } from './visitor.ts'
 
@@ -38,12 +39,14 @@ export interface InvitationParts {
   links: Links
   attempts: Attempts
   sessions: SessionService
+  factors: SecondFactorService
 }
 
 export interface AcceptRequest {
   token: string
   name?: string | undefined
   password: string
+  code?: string | undefined
 }
 
 function stateOf({ acceptedAt, withdrawnAt, expiresAt }: StoredInvitation): Invitation['state'] {
@@ -62,7 +65,7 @@ const writeInvitation = (row: StoredInvitation): Invitation => ({
   state: stateOf(row),
 })
 
-export function invitationService({ db, mail, links, attempts, sessions }: InvitationParts) {
+export function invitationService({ db, mail, links, attempts, sessions, factors }: InvitationParts) {
   const openInvitation = async (token: string): Promise<LiveInvitation & { id: string }> => {
     const shown = readToken(token)
     const invitation = shown && (await findInvitation(db, shown.id))
@@ -84,12 +87,14 @@ export function invitationService({ db, mail, links, attempts, sessions }: Invit
   const ofAccount = async (
     invitation: LiveInvitation & { id: string },
     account: { id: string; passwordHash: string | null },
-    { password }: AcceptRequest,
+    { password, code }: AcceptRequest,
   ): Promise<Acceptance> => {
     const forgive = await attempts.take([budget('password check', account.id, PASSWORD_CHECKS)])
     if (account.passwordHash === null || !(await passwordMatches(account.passwordHash, password)))
       throw new InputError([{ path: 'password', message: 'this is not the password of your account' }])
-    await forgive()
+    if (code === undefined) await forgive()
+    await factors.check(account.id, code)
+    if (code !== undefined) await forgive()
     return { invitationId: invitation.id, accountId: account.id, name: null, passwordHash: null }
   }
 

@@ -22,6 +22,7 @@ import { budget } from './attempts.ts'
 import { audit } from './audit.ts'
 import type { AttemptLimits, Attempts } from './attempts.ts'
 import type { KnownDevices } from './knownDevices.ts'
+import type { SecondFactorService } from './secondFactor.ts'
 import type { SessionTokens } from './token.ts'
 import type { Visitor } from './visitor.ts'
 
@@ -40,6 +41,7 @@ export interface SignedIn {
 export interface SignInRequest {
   email: string
   password: string
+  code?: string | undefined
 }
 
 /** A person whose password, or link, has been checked. */
@@ -74,6 +76,7 @@ export interface SessionParts {
   attempts: Attempts
   limits: AttemptLimits
   devices: KnownDevices
+  factors: SecondFactorService
 }
 
 const wrongCredentials = (): ProblemError =>
@@ -82,7 +85,14 @@ const wrongCredentials = (): ProblemError =>
     'No account has this e-mail address with this password. Check both and try again.',
   )
 
-export function sessionService({ db, tokens, attempts, limits, devices }: SessionParts): SessionService {
+export function sessionService({
+  db,
+  tokens,
+  attempts,
+  limits,
+  devices,
+  factors,
+}: SessionParts): SessionService {
   /** Checked in place of an unknown account's password, so that the answer takes the same work and time. */
   const decoy = hashPassword(randomUUID())
 
@@ -124,7 +134,10 @@ export function sessionService({ db, tokens, attempts, limits, devices }: Sessio
     async signIn(request, visitor) {
       const forgive = await attempts.take(await budgetsOf(request.email, visitor))
       const { userId, groupId } = await checkPassword(request)
-      await forgive()
+      // To be asked for the code is no failed attempt; a wrong code is.
+      if (request.code === undefined) await forgive()
+      await factors.check(userId, request.code)
+      if (request.code !== undefined) await forgive()
       if (groupId === null) {
         throw new ProblemError(
           'no-group',

@@ -38,6 +38,10 @@ export const account = z
     email: z.string(),
     emailVerified: z.boolean().describe('Whether a link sent to the address was opened'),
     hasPassword: z.boolean(),
+    secondFactor: z.object({
+      inForce: z.boolean(),
+      recoveryCodesLeft: z.number().int(),
+    }),
     createdAt: moment,
   })
   .meta({ id: 'Account' })
@@ -55,6 +59,29 @@ export const forgottenPasswordRequest = z.strictObject({ email }).meta({ id: 'Fo
 export const resetPasswordRequest = z
   .strictObject({ token: linkToken, newPassword })
   .meta({ id: 'ResetPasswordRequest' })
+
+export const beginSecondFactorRequest = z
+  .strictObject({ currentPassword: givenPassword })
+  .meta({ id: 'BeginSecondFactorRequest' })
+/** What an app needs to make codes; not in force until one of them is shown. */
+export const newSecondFactor = z
+  .object({
+    secret: z.string().describe('Base32, to be typed where no picture can be read'),
+    uri: z.string().describe('otpauth:// address with secret, account and issuer'),
+    qrSvg: z.string().describe('The same as a picture'),
+  })
+  .meta({ id: 'NewSecondFactor' })
+export type NewSecondFactor = z.output<typeof newSecondFactor>
+export const confirmSecondFactorRequest = z
+  .strictObject({ code: code.describe('That the app shows now') })
+  .meta({ id: 'ConfirmSecondFactorRequest' })
+export const secondFactorRequest = z
+  .strictObject({ currentPassword: givenPassword, code })
+  .meta({ id: 'SecondFactorRequest' })
+export const recoveryCodeList = z
+  .object({ recoveryCodes: z.array(z.string()).describe('Shown this once; each works once') })
+  .meta({ id: 'RecoveryCodeList' })
+export type RecoveryCodeList = z.output<typeof recoveryCodeList>
 
 /** A browser signed in. */
 export const ownSession = z

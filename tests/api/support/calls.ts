@@ -1,11 +1,12 @@
 import { CATALOGUE } from '#api/endpoints/catalogue'
-import { sessionInfo } from '#core/wire/index'
+import { newSecondFactor, sessionInfo } from '#core/wire/index'
 import type { SessionInfo } from '#core/wire/index'
 import type { Endpoint } from '#api/endpoints/endpoint'
 import { examples } from '#api/openapi/examples'
 import type { Response } from 'supertest'
 import type TestAgent from 'supertest/lib/agent.js'
 import { PASSWORD } from '../../db/support/groups.ts'
+import { codeAt } from '../../support/oneTimeCode.ts'
 import type { saveOneOfEach } from '../../db/support/records.ts'
 
 /** Ids of things that exist, to put in the place of the made-up ones of the examples. */
@@ -48,6 +49,26 @@ async function idFor(agent: TestAgent, endpoint: Endpoint, saved: Saved): Promis
   }
 }
 
+const BY_CODE = ['confirmSecondFactor', 'giveUpSecondFactor', 'renewRecoveryCodes']
+
+/** Sets a second factor up as far as the endpoint needs it, and returns a code it takes. */
+async function codeFor(agent: TestAgent, { id }: Endpoint): Promise<string> {
+  const begun = await agent.post('/api/v1/account/second-factor').send({ currentPassword: PASSWORD })
+  const { secret } = newSecondFactor.parse(begun.body)
+  const now = Date.now()
+  if (id === 'confirmSecondFactor') return codeAt(secret, now)
+  await agent.post('/api/v1/account/second-factor/confirm').send({ code: codeAt(secret, now) })
+  return codeAt(secret, now + 30_000)
+}
+
+/** Gives the factor up again, by one of the recovery codes just handed out. */
+async function giveUpFactor(agent: TestAgent, answer: Response): Promise<void> {
+  const { recoveryCodes = [] } = answer.body as { recoveryCodes?: string[] }
+  if (recoveryCodes[0] === undefined) return
+  const body = { currentPassword: PASSWORD, code: recoveryCodes[0] }
+  await agent.post('/api/v1/account/second-factor/give-up').send(body)
+}
+
 /** Calls an endpoint as its documented example does, with ids and passwords that exist. */
 export async function callByExample(agent: TestAgent, endpoint: Endpoint, saved: Saved): Promise<Response> {
   const call = agent[endpoint.method](addressOf(endpoint, await idFor(agent, endpoint, saved)))
@@ -61,7 +82,10 @@ export async function callByExample(agent: TestAgent, endpoint: Endpoint, saved:
     groupId: saved.groupId,
     currentPassword: PASSWORD,
     newPassword: PASSWORD,
+    ...(BY_CODE.includes(endpoint.id) ? { code: await codeFor(agent, endpoint) } : {}),
   }
   const entries = Object.entries(body as object).map(([key, value]) => [key, real[key] ?? value] as const)
-  return call.send(Object.fromEntries(entries))
+  const answer = await call.send(Object.fromEntries(entries))
+  if (BY_CODE.includes(endpoint.id)) await giveUpFactor(agent, answer)
+  return answer
 }

@@ -4,7 +4,9 @@ import type {
   Invitation,
   OwnGroup,
   OwnSession,
+  NewSecondFactor,
   ReceivedInvitation,
+  RecoveryCodeList,
   Role,
   SessionInfo,
 } from '#core/wire/index'
@@ -49,6 +51,18 @@ export const changeEmail = (email: string, currentPassword: string): Promise<voi
   api('POST', '/account/email', { email, currentPassword })
 
 export const sendVerification = (): Promise<void> => api('POST', '/account/email/verification')
+
+export const beginSecondFactor = (currentPassword: string): Promise<NewSecondFactor> =>
+  api('POST', '/account/second-factor', { currentPassword })
+
+export const confirmSecondFactor = (code: string): Promise<RecoveryCodeList> =>
+  api('POST', '/account/second-factor/confirm', { code })
+
+export const giveUpSecondFactor = (currentPassword: string, code: string): Promise<void> =>
+  api('POST', '/account/second-factor/give-up', { currentPassword, code })
+
+export const renewRecoveryCodes = (currentPassword: string, code: string): Promise<RecoveryCodeList> =>
+  api('POST', '/account/recovery-codes', { currentPassword, code })
 
 export const endSession = (id: string): Promise<void> => api('DELETE', `/account/sessions/${id}`)
 

@@ -6,9 +6,10 @@ import { Section } from '../records/Section.tsx'
 import { EmailForm } from './EmailForm.tsx'
 import { NameForm } from './NameForm.tsx'
 import { PasswordForm } from './PasswordForm.tsx'
+import { SecondFactor } from './SecondFactor.tsx'
 import { SessionList } from './SessionList.tsx'
 
-/** One's own account: name, password, address, and the browsers one is signed in with. */
+/** One's own account: name, password, address, second factor, and the browsers one is signed in with. */
 export default function AccountPage() {
   const query = useQuery(accountQuery)
   return (
@@ -25,6 +26,9 @@ export default function AccountPage() {
             </Section>
             <Section title="Password">
               <PasswordForm account={account} />
+            </Section>
+            <Section title="Second factor">
+              <SecondFactor account={account} />
             </Section>
             <Section title="Signed in">
               <SessionList />

@@ -16,6 +16,7 @@ const ACTIONS: Record<string, string> = {
   'account.rename': 'changed their name',
   'account.password': 'changed their password',
   'account.email': 'changed their address',
+  'account.second-factor': 'changed their second factor',
   'invitation.create': 'invited somebody',
   'invitation.withdraw': 'withdrew an invitation',
   'invitation.accept': 'accepted an invitation',
