@@ -10,6 +10,7 @@ import { GUEST_OPENINGS_PER_MINUTE, addressLimit, requestLimit } from '../middle
 import { sessionCookie } from '../middleware/sessionCookie.ts'
 import { visitors } from '../middleware/visitor.ts'
 import { apiDocument } from '../openapi/document.ts'
+import { keyRing } from '../secrets/keyRing.ts'
 import { sealer } from '../secrets/sealer.ts'
 import { accountService } from '../services/accounts.ts'
 import { attemptCounter } from '../services/attempts.ts'
@@ -51,7 +52,7 @@ export function apiRoutes(dependencies: AppDependencies): Router {
   const factors = secondFactorService({ db, sealer: seals, mail, attempts })
   const sessions = sessionService({
     db,
-    tokens: sessionTokens(sessionSecret),
+    tokens: sessionTokens(keyRing(db, seals)),
     attempts,
     limits: attemptLimits,
     devices: knownDevices(sessionSecret),

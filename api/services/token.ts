@@ -1,4 +1,6 @@
-import { SignJWT, jwtVerify } from 'jose'
+import { SignJWT, decodeProtectedHeader, errors, jwtVerify } from 'jose'
+import { SIGNING_ALGORITHM } from '../secrets/keyRing.ts'
+import type { KeyRing } from '../secrets/keyRing.ts'
 
 const ISSUER = 'emberline'
 
@@ -9,22 +11,37 @@ export interface SessionTokens {
   read(token: string): Promise<string | null>
 }
 
-export function sessionTokens(secret: string): SessionTokens {
-  const key = new TextEncoder().encode(secret)
+function kidOf(token: string): string | undefined | null {
+  try {
+    return decodeProtectedHeader(token).kid
+  } catch {
+    return null
+  }
+}
+
+export function sessionTokens(ring: KeyRing): SessionTokens {
   return {
-    issue: (sessionId, expiresAt) =>
-      new SignJWT({ sid: sessionId })
-        .setProtectedHeader({ alg: 'HS256' })
+    async issue(sessionId, expiresAt) {
+      const { kid, key } = await ring.current()
+      return new SignJWT({ sid: sessionId })
+        .setProtectedHeader({ alg: SIGNING_ALGORITHM, kid })
         .setIssuer(ISSUER)
         .setIssuedAt()
         .setExpirationTime(expiresAt)
-        .sign(key),
+        .sign(key)
+    },
     async read(token) {
+      const kid = kidOf(token)
+      if (kid === null || kid === undefined) return null
+      // A database that is away is no forgery: that error goes on.
+      const publicKeys = await ring.publicKeys(kid)
       try {
-        const { payload } = await jwtVerify(token, key, { algorithms: ['HS256'], issuer: ISSUER })
+        const options = { algorithms: [SIGNING_ALGORITHM], issuer: ISSUER }
+        const { payload } = await jwtVerify(token, publicKeys, options)
         return typeof payload['sid'] === 'string' ? payload['sid'] : null
-      } catch {
-        return null
+      } catch (error) {
+        if (error instanceof errors.JOSEError) return null
+        throw error
       }
     },
   }

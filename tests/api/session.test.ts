@@ -1,5 +1,9 @@
 import { sessionInfo } from '#core/wire/index'
-import { SignJWT } from 'jose'
+import { SignJWT, decodeProtectedHeader, generateKeyPair } from 'jose'
+import type { CryptoKey } from 'jose'
+import { connect } from '#db/database'
+import { keyRing } from '#api/secrets/keyRing'
+import { sealer } from '#api/secrets/sealer'
 import request from 'supertest'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { PASSWORD } from '../db/support/groups.ts'
@@ -24,13 +28,28 @@ async function sessionIdOf(userId: string): Promise<string> {
   return rows[0]?.id ?? ''
 }
 
-const forge = (secret: string, sid: string, issuer = 'emberline') =>
-  new SignJWT({ sid })
-    .setProtectedHeader({ alg: 'HS256' })
-    .setIssuer(issuer)
+const part = (value: unknown) => Buffer.from(JSON.stringify(value)).toString('base64url')
+
+/** The token a member's browser is given. */
+async function tokenOf({ email }: { email: string }): Promise<string> {
+  const answer = await request(harness.app).post('/api/v1/session').send({ email, password: PASSWORD })
+  return (answer.get('Set-Cookie')?.[0] ?? '').split(';')[0]?.split('=')[1] ?? ''
+}
+
+/** Signs as the server does, with the key it signs with or another one. */
+async function forge(sid: string, changed: { kid?: string; key?: CryptoKey; issuer?: string } = {}) {
+  const { db, close } = connect(harness.serverUrl, () => undefined)
+  const { kid, key } = await keyRing(db, sealer(SESSION_SECRET)).current()
+  await close()
+  return new SignJWT({ sid })
+    .setProtectedHeader({ alg: 'EdDSA', kid: changed.kid ?? kid })
+    .setIssuer(changed.issuer ?? 'emberline')
     .setIssuedAt()
     .setExpirationTime('1h')
-    .sign(new TextEncoder().encode(secret))
+    .sign(changed.key ?? key)
+}
+
+const otherKey = async () => (await generateKeyPair('EdDSA')).privateKey
 
 describe('signing in', () => {
   it('answers who has signed in, and sets a cookie that scripts cannot read', async () => {
@@ -152,26 +171,87 @@ describe('a session', () => {
 })
 
 describe('a token', () => {
-  it('signed with the right secret opens its session, so that the forgeries below differ in one thing each', async () => {
+  it('signed with the right key opens its session, so that the forgeries below differ in one thing each', async () => {
     await harness.signIn(harness.alder.author)
     const id = await sessionIdOf(harness.alder.author.id)
-    expect((await whoAmI(await forge(SESSION_SECRET, id))).status).toBe(200)
+    expect((await whoAmI(await forge(id))).status).toBe(200)
   })
 
   it.each([
-    ['signed with another secret', (id: string) => forge('another secret of at least 32 characters!!', id)],
-    ['of another issuer', (id: string) => forge(SESSION_SECRET, id, 'someone-else')],
-    ['of a session that never was', () => forge(SESSION_SECRET, '00000000-0000-4000-8000-000000000000')],
+    [
+      'signed with another key under the same name',
+      async (id: string) => forge(id, { key: await otherKey() }),
+    ],
+    ['signed with a key nobody knows', async (id: string) => forge(id, { kid: 'x', key: await otherKey() })],
+    ['of another issuer', (id: string) => forge(id, { issuer: 'someone-else' })],
+    ['of a session that never was', () => forge('00000000-0000-4000-8000-000000000000')],
     [
       'that claims to need no signature',
       async (id: string) => {
-        const part = (value: unknown) => Buffer.from(JSON.stringify(value)).toString('base64url')
-        return `${part({ alg: 'none' })}.${part({ sid: id, iss: 'emberline', exp: 4_000_000_000 })}.`
+        const [header = ''] = (await forge(id)).split('.')
+        const { kid } = JSON.parse(Buffer.from(header, 'base64url').toString()) as { kid: string }
+        return `${part({ alg: 'none', kid })}.${part({ sid: id, iss: 'emberline', exp: 4_000_000_000 })}.`
       },
     ],
+    ['that names no key', async (id: string) => `${part({ alg: 'EdDSA' })}.${part({ sid: id })}.x`],
     ['that is no token', async () => 'x'.repeat(80)],
   ])('%s is refused', async (_what, make) => {
     await signInTo(harness.app, harness.alder.author)
     expectProblem(await whoAmI(await make(await sessionIdOf(harness.alder.author.id))), 'not-signed-in')
+  })
+})
+
+describe('the keys that sign sessions', () => {
+  const kidOf = (token: string) => decodeProtectedHeader(token).kid
+  const age = (days: number) =>
+    harness.owner.query('update signing_keys set created_at = created_at - make_interval(days => $1)', [days])
+  const kept = async () => (await harness.owner.query('select 1 from signing_keys')).rowCount
+
+  it('are replaced after a month; what the one before signed is still believed, until it has run out', async () => {
+    const before = await tokenOf(harness.birch.reader)
+    await age(31)
+    const app = harness.appWith({})
+    const answer = await request(app)
+      .post('/api/v1/session')
+      .send({ email: harness.birch.reader.email, password: PASSWORD })
+    const after = (answer.get('Set-Cookie')?.[0] ?? '').split(';')[0]?.split('=')[1] ?? ''
+    expect(kidOf(after)).not.toBe(kidOf(before))
+    const asks = (token: string) =>
+      request(app).get('/api/v1/session').set('Cookie', `emberline_session=${token}`)
+    expect((await asks(before)).status).toBe(200)
+    expect((await asks(after)).status).toBe(200)
+    // A server that has been up all the while learns of the new key from the token that names it.
+    await new Promise((resolve) => setTimeout(resolve, 2_100))
+    expect((await whoAmI(after)).status).toBe(200)
+    await age(20)
+    const later = harness.appWith({})
+    const old = request(later).get('/api/v1/session').set('Cookie', `emberline_session=${before}`)
+    expectProblem(await old, 'not-signed-in')
+  })
+
+  it('are one, when several servers start at once', async () => {
+    await harness.owner.query('delete from signing_keys')
+    const apps = [harness.appWith({}), harness.appWith({}), harness.appWith({})]
+    const answers = await Promise.all(
+      apps.map((app) =>
+        request(app).post('/api/v1/session').send({ email: harness.birch.lead.email, password: PASSWORD }),
+      ),
+    )
+    expect(answers.map(({ status }) => status)).toEqual([201, 201, 201])
+    expect(await kept()).toBe(1)
+  })
+
+  it('sealed by another secret are passed over for a new one', async () => {
+    const { email } = harness.birch.lead
+    const app = harness.appWith({ sessionSecret: `${SESSION_SECRET} and another` })
+    expect((await request(app).post('/api/v1/session').send({ email, password: PASSWORD })).status).toBe(201)
+  })
+
+  it('cannot be read in the database', async () => {
+    const { rows } = await harness.owner.query<{ row: string }>(
+      'select row_to_json(k)::text as row from signing_keys k',
+    )
+    expect(rows.length).toBeGreaterThan(0)
+    for (const { row } of rows) expect(row).not.toMatch(/"d"|"crv"|Ed25519/)
   })
 })

@@ -31,6 +31,7 @@ const TABLES = [
   'recovery_codes',
   'second_factors',
   'sessions',
+  'signing_keys',
   'users',
 ]
 
@@ -138,6 +139,8 @@ describe('row-level security', () => {
     expect(rows.map(({ proname }) => proname)).toEqual([
       'accept_invitation',
       'account_for_sign_in',
+      'add_signing_key',
+      'all_signing_keys',
       'awaits_first_group',
       'forgive_attempt',
       'found_first_group',
