@@ -1,3 +1,4 @@
+import type { ComputeLimits } from './services/computing.ts'
 import type { PublicInfo } from '#core/wire/index'
 import type { Database } from '#db/database'
 import type { JobQueue } from '#db/queue/jobQueue'
@@ -21,6 +22,7 @@ export interface AppDependencies {
   demoSignIns: PublicInfo['demoSignIns'] | null
   /** Requests a minute taken of one person, key or address; a key may carry a number of its own. */
   requestsPerMinute: number
+  computeLimits: ComputeLimits
   attemptLimits: AttemptLimits
   /** Where people reach the product, for the links in mails; never taken from a request, which could claim any. */
   origin: () => string

@@ -14,6 +14,7 @@ import { smtpSender } from './mail/sender.ts'
 import type { MailSender } from './mail/sender.ts'
 import type { MailSink } from './mail/sink.ts'
 import { USUAL_REQUESTS_PER_MINUTE } from './middleware/requestLimit.ts'
+import { DEFAULT_COMPUTE_LIMITS } from './services/computing.ts'
 import { sealer } from './secrets/sealer.ts'
 import { DEFAULT_ATTEMPT_LIMITS, attemptCounter } from './services/attempts.ts'
 import { firstGroupLink } from './services/firstGroup.ts'
@@ -96,6 +97,7 @@ async function main(): Promise<void> {
     mailSink: sink,
     demoSignIns: people,
     requestsPerMinute: USUAL_REQUESTS_PER_MINUTE,
+    computeLimits: DEFAULT_COMPUTE_LIMITS,
     attemptLimits: DEFAULT_ATTEMPT_LIMITS,
     origin,
   })

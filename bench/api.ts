@@ -69,6 +69,7 @@ export async function addApiBenchmarks(bench: Bench): Promise<() => Promise<void
     webRoot: 'dist/web',
     demoSignIns: null,
     requestsPerMinute: 1e9,
+    computeLimits: { running: 4, waiting: 1000 },
     attemptLimits: DEFAULT_ATTEMPT_LIMITS,
     origin: () => 'http://127.0.0.1',
   })

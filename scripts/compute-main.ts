@@ -1,22 +1,14 @@
 /** The `compute` command: one JSON input on standard input, or one a line, to one result or one a line. */
 import { createInterface } from 'node:readline'
 import { text } from 'node:stream/consumers'
-import {
-  ConvergenceError,
-  checkEvidence,
-  computeAbundance,
-  computeAttribution,
-  computeHistory,
-  computeSolve,
-} from '#core/index'
+import { ConvergenceError, QUESTIONS, complete } from '#core/index'
+import type { Question } from '#core/index'
 import { InputError, faultLine } from '#core/wire/index'
 
-const QUESTIONS: Record<string, (input: unknown) => unknown> = {
-  history: computeHistory,
-  abundance: computeAbundance,
-  solve: computeSolve,
-  attribute: computeAttribution,
-  evidence: checkEvidence,
+/** The question of that name, answered at once; undefined for a name the core does not know. */
+function questionOf(what: string | undefined): ((input: unknown) => unknown) | undefined {
+  if (what === undefined || !Object.hasOwn(QUESTIONS, what)) return undefined
+  return (input) => complete<unknown>(QUESTIONS[what as Question](input))
 }
 
 const USAGE = `usage: npm run --silent compute -- ${Object.keys(QUESTIONS).join('|')} [--lines] < input.json > output.json
@@ -65,7 +57,7 @@ async function answerLines(question: (input: unknown) => unknown): Promise<void>
 /** Runs the command; resolves to the exit status: 0, or 2 when the input or the words of the command are at fault. */
 export async function main(argv: readonly string[]): Promise<number> {
   const [what, ...flags] = argv
-  const question = what === undefined ? undefined : QUESTIONS[what]
+  const question = questionOf(what)
   const unknownFlag = flags.find((flag) => flag !== '--lines')
   if (!question || unknownFlag !== undefined) {
     process.stderr.write(`${USAGE}\n`)

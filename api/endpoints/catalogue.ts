@@ -16,7 +16,17 @@ import {
   revokeSessionEndpoint,
   sendVerificationEndpoint,
 } from './account.ts'
-import { computeAbundanceEndpoint, computeHistoryEndpoint } from './compute.ts'
+import {
+  computeAbundanceEndpoint,
+  computeAttributeEndpoint,
+  computeBatchEndpoint,
+  computeConvertEndpoint,
+  computeHistoryEndpoint,
+  computeLaboratoryEndpoint,
+  computePropagateEndpoint,
+  computeSolveEndpoint,
+  publishedValuesEndpoint,
+} from './compute.ts'
 import type { Endpoint } from './endpoint.ts'
 import {
   createEvaluationEndpoint,
@@ -87,6 +97,13 @@ export const CATALOGUE: readonly Endpoint[] = [
   createEvaluationEndpoint,
   computeHistoryEndpoint,
   computeAbundanceEndpoint,
+  computeSolveEndpoint,
+  computeAttributeEndpoint,
+  computePropagateEndpoint,
+  computeConvertEndpoint,
+  computeLaboratoryEndpoint,
+  computeBatchEndpoint,
+  publishedValuesEndpoint,
   listKeysEndpoint,
   createKeyEndpoint,
   revokeKeyEndpoint,

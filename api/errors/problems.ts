@@ -21,6 +21,7 @@ export const PROBLEMS = {
   'no-convergence': { status: 422, title: 'No converged number was reached' },
   'too-many-requests': { status: 429, title: 'Too many requests' },
   'too-many-attempts': { status: 429, title: 'Too many attempts' },
+  busy: { status: 503, title: 'Too many computations at once' },
   internal: { status: 500, title: 'Something went wrong on the server' },
   'database-away': { status: 503, title: 'The database does not answer' },
 } as const satisfies Record<string, { status: number; title: string }>

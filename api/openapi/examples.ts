@@ -1,4 +1,15 @@
-import { CORE_VERSION, computeAbundance, computeHistory, evidenceOf } from '#core/index'
+import {
+  CORE_VERSION,
+  computeAbundance,
+  computeAttribution,
+  computeConversion,
+  computeHistory,
+  computeLaboratory,
+  computePropagation,
+  computeSolve,
+  evidenceOf,
+  publishedValues,
+} from '#core/index'
 import { abundanceRequest, digestOf, parseInput } from '#core/wire/index'
 import type { CandidateInput, HistoryInput } from '#core/wire/index'
 
@@ -268,6 +279,99 @@ const accountExamples: Record<string, EndpointExample> = {
   },
 }
 
+/** A question with its answer by this core. */
+const worked = (body: unknown, answer: (input: unknown) => unknown): EndpointExample => ({
+  body,
+  answer: answer(body),
+})
+
+const kination = { expansion: { kind: 'fluid', index: 2, equalityTemperatureGeV: 1 } }
+
+/** One of each kind of question; the samples are few, so that making them costs little. */
+const questionExamples = {
+  computeSolve: worked(
+    {
+      history: historyWritten,
+      candidate: candidateWritten,
+      solveFor: 'candidate.annihilation.sWaveCm3PerS',
+      targetOmegaH2: 0.12,
+      between: [1e-26, 1e-25],
+    },
+    computeSolve,
+  ),
+  computeAttribute: worked(
+    {
+      baseline: { bath: { treatment: 'thresholds' } },
+      variant: { ...historyWritten, ...kination },
+      candidate: candidateWritten,
+    },
+    computeAttribution,
+  ),
+  computePropagate: worked(
+    {
+      history: historyWritten,
+      candidate: candidateWritten,
+      distributions: [
+        { path: 'candidate.massGeV', kind: 'normal', mean: 100, standardDeviation: 2 },
+        { path: 'history.bath.band', kind: 'uniform', low: -1, high: 1 },
+      ],
+      samples: 32,
+      seed: 7,
+      histogramBins: 4,
+    },
+    computePropagation,
+  ),
+  computeConvert: worked(
+    { from: { quantity: 'temperatureGeV', values: [1, 0.001] }, to: ['timeS', 'redshift'] },
+    computeConversion,
+  ),
+  computeLaboratory: worked(
+    {
+      history: historyWritten,
+      measured: {
+        parentMassGeV: { value: 300, minus: 3, plus: 3 },
+        lifetimeS: { value: 1e-11, minus: 2e-12, plus: 2e-12 },
+        massGeV: { value: 1e-5, minus: 1e-6, plus: 1e-6 },
+      },
+      parent: { degreesOfFreedom: 4, statistics: 'fermion' },
+      samples: 32,
+      seed: 7,
+    },
+    computeLaboratory,
+  ),
+  computeBatch: {
+    body: {
+      items: [
+        { what: 'convert', input: { from: { quantity: 'temperatureGeV', values: [1] }, to: ['timeS'] } },
+        { what: 'convert', input: { from: { quantity: 'gS', values: [10] }, to: ['timeS'] } },
+      ],
+    },
+    answer: {
+      items: [
+        {
+          status: 'done',
+          result: computeConversion({ from: { quantity: 'temperatureGeV', values: [1] }, to: ['timeS'] }),
+        },
+        {
+          status: 'failed',
+          problem: {
+            type: 'urn:emberline:problem:invalid-input',
+            title: 'The input is at fault',
+            status: 422,
+            detail: 'One field does not fit; see the faults. Nothing was saved.',
+            faults: [
+              { path: 'from.quantity', message: 'allowed: a quantity that rises or falls throughout' },
+            ],
+          },
+        },
+      ],
+    },
+  },
+  publishedValues: {
+    answer: { coreVersion: CORE_VERSION, values: publishedValues().slice(0, 3) },
+  },
+}
+
 /** Examples by the id of their endpoint. */
 export function examples(): Record<string, EndpointExample> {
   const { history, candidate } = parseInput(abundanceRequest, {
@@ -294,6 +398,7 @@ export function examples(): Record<string, EndpointExample> {
     ...keyExamples,
     ...guestLinkExamples,
     listAuditEntries: { answer: { items: [auditExample], next: null } },
+    ...questionExamples,
     computeHistory: { body: rowsAsked, answer: computeHistory(rowsAsked) },
   }
 }

@@ -15,6 +15,7 @@ import { sealer } from '../secrets/sealer.ts'
 import { accountService } from '../services/accounts.ts'
 import { attemptCounter } from '../services/attempts.ts'
 import { auditService } from '../services/audit.ts'
+import { computing } from '../services/computing.ts'
 import { evaluationService } from '../services/evaluations.ts'
 import { guestLinkService } from '../services/guestLinks.ts'
 import { firstGroupService } from '../services/firstGroup.ts'
@@ -40,8 +41,17 @@ import { sessionRoutes } from './session.ts'
 
 /** Everything below /api. */
 export function apiRoutes(dependencies: AppDependencies): Router {
-  const { db, queue, publicUrl, sessionSecret, demoSignIns, attemptLimits, requestsPerMinute, origin } =
-    dependencies
+  const {
+    db,
+    queue,
+    publicUrl,
+    sessionSecret,
+    demoSignIns,
+    attemptLimits,
+    computeLimits,
+    requestsPerMinute,
+    origin,
+  } = dependencies
   const https = publicUrl?.protocol === 'https:'
   const cookie = sessionCookie(https)
   const entrance = visitors(cookie, https)
@@ -73,7 +83,7 @@ export function apiRoutes(dependencies: AppDependencies): Router {
   historyRoutes(v1, historyService(db))
   candidateRoutes(v1, candidateService(db))
   evaluationRoutes(v1, evaluationService(db))
-  computeRoutes(v1)
+  computeRoutes(v1, computing(computeLimits))
   keyRoutes(v1, keys)
   guestLinkRoutes(v1, guestLinkService(db), addressLimit(GUEST_OPENINGS_PER_MINUTE))
   auditRoutes(v1, auditService(db))

@@ -57,6 +57,8 @@ export function mount<
         req,
         res,
       })
+      // Answered already, line by line; or nobody is there any more.
+      if (res.writableEnded || res.destroyed) return
       res.status(status)
       if (status === 204) res.end()
       else res.json(answer)

@@ -57,6 +57,7 @@ export async function startHarness(): Promise<Harness> {
       webRoot: 'no-such-folder',
       demoSignIns: null,
       requestsPerMinute: 10_000,
+      computeLimits: { running: 4, waiting: 64 },
       attemptLimits: { perAddress: 1000, perAccount: 1000 },
       origin: () => ORIGIN,
       ...changed,
