@@ -29,6 +29,8 @@ export interface AnnihilatingParticle {
   selfConjugate: boolean
   /** η = Z₊ − Z₋; Z is then Z₋ alone. */
   asymmetry?: number
+  /** Share of the candidates made by a decaying field that are these particles; all unless given. */
+  shareOfField?: number
 }
 
 /** The state at the x last asked for. */
@@ -44,6 +46,7 @@ export class AnnihilatingState {
   /** η. */
   readonly asymmetry: number
   private readonly share: number
+  private readonly shareOfField: number
   private readonly rateBreaks: readonly number[]
   private readonly point = emptyExpansion()
   private hotEdge = Number.MAX_VALUE
@@ -55,6 +58,7 @@ export class AnnihilatingState {
     this.lnMass = Math.log(particle.massGeV)
     this.asymmetry = particle.asymmetry ?? 0
     this.share = particle.selfConjugate ? 1 : 0.5
+    this.shareOfField = particle.shareOfField ?? 1
     this.rateBreaks = particle.rate.breaks.map((x) => this.lnMass - Math.log(x))
   }
 
@@ -108,7 +112,9 @@ export class AnnihilatingState {
     this.lnEquilibrium =
       logEquilibriumYield(particle.species, particle.massGeV, x, point.gS) - point.lnDilution
     this.production =
-      point.candidatesPerTime === 0 ? 0 : (point.candidatesPerTime * perHubble) / (point.entropy * dilution)
+      point.candidatesPerTime === 0
+        ? 0
+        : (this.shareOfField * point.candidatesPerTime * perHubble) / (point.entropy * dilution)
   }
 
   /** n_eq⟨σv⟩/H at x, with the total n_eq and no factor one half; moves there. */

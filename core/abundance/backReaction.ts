@@ -1,9 +1,10 @@
 /**
  * Freeze-in by decay with inverse decays kept:
  *
- *   dZ/d ln x = P (1 − (Y/Y_eq)^{n_X}),   Y = Z e^{lnDilution},
+ *   dZ/d ln x = P (1 − (Y/Y_eq)^{n_X}) + P_φ,   Y = Z e^{lnDilution},
  *
- * P the production without them and n_X candidates per decay. It goes over smoothly into thermalisation as the width grows.
+ * P the production without them, n_X candidates per decay, and P_φ what a decaying field makes beside them. It goes over
+ * smoothly into thermalisation as the width grows.
  * Source: Hall, Jedamzik, March-Russell, West, JHEP 03 (2010) 080, §2; the power n_X by detailed balance.
  */
 import { emptyExpansion } from '../history/expansionPoint.ts'
@@ -12,7 +13,7 @@ import { solveOde } from '../numerics/ode/radau.ts'
 import { integrationFailure } from '../numerics/convergence.ts'
 import { logEquilibriumYield } from './equilibrium.ts'
 import type { EquilibriumSpecies } from './equilibrium.ts'
-import { FREEZE_IN_RULES, productionPerLnT, solveFreezeIn } from './freezeIn.ts'
+import { FREEZE_IN_RULES, fieldPerLnT, productionEnds, solveFreezeIn, thermalPerLnT } from './freezeIn.ts'
 import type { FreezeInSource } from './freezeIn.ts'
 import { breaksBetween } from './panels.ts'
 import { Sampler } from './yieldSamples.ts'
@@ -38,8 +39,9 @@ export function solveWithBackReaction(
 ): number {
   const lnScale = Math.log(source.scaleGeV)
   const hot = Math.log(source.hottestGeV)
-  const cold = Math.log(Math.max(source.coldestGeV, history.temperatureToday))
-  const production = productionPerLnT(history, source)
+  const cold = Math.log(productionEnds(history, source))
+  const production = thermalPerLnT(history, source)
+  const fromField = history.expansion.producesUntil === null ? () => 0 : fieldPerLnT(history)
   const point = emptyExpansion()
   const lnEquilibrium = (lnT: number): number => {
     history.at(lnT, point)
@@ -68,10 +70,14 @@ export function solveWithBackReaction(
         evaluate(lnX, y, slope, jacobian) {
           const lnT = Math.max(low, Math.min(high, lnScale - lnX))
           const source = production(lnT) / unit
+          slope[0] = fromField(lnT) / unit
+          jacobian[0] = 0
+          // Long after the parents, Y_eq may be nothing.
+          if (source === 0) return
           const ratio = (unit * y[0]!) / Math.exp(lnEquilibrium(lnT))
           // Between Newton steps y may be negative, where a broken power does not exist.
           const filled = Math.abs(ratio) ** (perDecay - 1)
-          slope[0] = source * (1 - filled * ratio)
+          slope[0] += source * (1 - filled * ratio)
           jacobian[0] = (-source * perDecay * filled * unit) / Math.exp(lnEquilibrium(lnT))
         },
       },

@@ -7,11 +7,12 @@
  * Source: Hall, Jedamzik, March-Russell, West, JHEP 03 (2010) 080.
  */
 import { emptyExpansion } from '../history/expansionPoint.ts'
+import type { ExpansionPoint } from '../history/expansionPoint.ts'
 import type { ThermalHistory } from '../history/thermalHistory.ts'
 import { gaussLegendre, integrateWith } from '../numerics/quadrature/gaussLegendre.ts'
 import type { QuadratureRule } from '../numerics/quadrature/gaussLegendre.ts'
 import { panelEdges } from './panels.ts'
-import { Sampler } from './yieldSamples.ts'
+import { Sampler, emptySamples } from './yieldSamples.ts'
 import type { YieldSamples } from './yieldSamples.ts'
 
 /** What produces the candidate. */
@@ -37,15 +38,38 @@ export const FREEZE_IN_RULES: readonly QuadratureRule[] = [
 
 const WIDEST_PANEL = 1
 
-/** dZ/d ln(1/T) at ln T. */
-export function productionPerLnT(history: ThermalHistory, source: FreezeInSource): (lnT: number) => number {
+/** dZ/d ln(1/T) at ln T for a rate per volume and time, GeV⁴. */
+function perLnT(history: ThermalHistory, rateAt: (point: ExpansionPoint) => number): (lnT: number) => number {
   const point = emptyExpansion()
   return (lnT) => {
     history.at(lnT, point)
-    const rate = source.reactionDensity(point.temperature) + point.candidatesPerTime
-    return (rate * point.stretch * Math.exp(-point.lnDilution)) / (point.entropy * point.hubble)
+    return (rateAt(point) * point.stretch * Math.exp(-point.lnDilution)) / (point.entropy * point.hubble)
   }
 }
+
+/** dZ/d ln(1/T) at ln T from the bath alone. */
+export const thermalPerLnT = (history: ThermalHistory, source: FreezeInSource) =>
+  perLnT(history, (point) => source.reactionDensity(point.temperature))
+
+/** dZ/d ln(1/T) at ln T from a decaying field alone. */
+export const fieldPerLnT = (history: ThermalHistory) => perLnT(history, (point) => point.candidatesPerTime)
+
+/** dZ/d ln(1/T) at ln T. */
+export const productionPerLnT = (history: ThermalHistory, source: FreezeInSource) =>
+  perLnT(history, (point) => source.reactionDensity(point.temperature) + point.candidatesPerTime)
+
+/** Temperature, GeV, below which nothing is made, neither by the bath nor by a decaying field. */
+export const productionEnds = (history: ThermalHistory, source: FreezeInSource): number =>
+  Math.max(history.temperatureToday, Math.min(source.coldestGeV, history.expansion.producesUntil ?? Infinity))
+
+/** What a decaying field makes from a temperature, GeV, downwards; the bath makes nothing. */
+export const fieldSource = (scaleGeV: number, hottestGeV: number): FreezeInSource => ({
+  scaleGeV,
+  hottestGeV,
+  coldestGeV: hottestGeV,
+  reactionDensity: () => 0,
+  breaks: [],
+})
 
 /**
  * The yield today.
@@ -67,10 +91,7 @@ export function solveFreezeIn(
   }
   const hot = Math.log(source.hottestGeV)
   const today = Math.log(history.temperatureToday)
-  const cold = Math.max(
-    today,
-    Math.log(Math.min(source.coldestGeV, history.expansion.producesUntil ?? Infinity)),
-  )
+  const cold = Math.log(productionEnds(history, source))
   const edges = panelEdges(history, hot, cold, WIDEST_PANEL, source.breaks.map(Math.log))
   let z = 0
   sampler.upTo(lnScale - hot - 1e-12, () => NaN)
@@ -84,6 +105,19 @@ export function solveFreezeIn(
   }
   sampler.upTo(lnScale - today, (lnX) => lnYield(lnX, z))
   return z
+}
+
+/** Adds what a decaying field makes, as a source, to samples of a yield from elsewhere. */
+export function addField(history: ThermalHistory, field: FreezeInSource, samples: YieldSamples): void {
+  const more = emptySamples(samples.lnX)
+  solveFreezeIn(history, field, FREEZE_IN_RULES[1]!, more)
+  more.lnYield.forEach((lnMore, i) => {
+    if (!Number.isFinite(lnMore)) return
+    const lnElsewhere = samples.lnYield[i]!
+    samples.lnYield[i] = Number.isNaN(lnElsewhere)
+      ? lnMore
+      : lnMore + Math.log1p(Math.exp(lnElsewhere - lnMore))
+  })
 }
 
 /** Temperature, GeV, where dZ/d ln T is largest, by a scan in steps of 2 %. */

@@ -15,8 +15,12 @@ const EARLIEST_X = 1e-5
 /** x beyond which e^{−x} leaves nothing. */
 const LATEST_X = 45
 
-const hottest = (history: ThermalHistory, unbounded: number): number =>
-  Math.min(history.input.maximumTemperatureGeV ?? Infinity, unbounded, HOTTEST_GEV)
+/** Where production begins: at the maximum temperature, where the bath begins to count, or as soon as a decaying field does. */
+function hottest(history: ThermalHistory, unbounded: number): number {
+  const maximum = history.input.maximumTemperatureGeV
+  const beginning = history.expansion.producesUntil === null ? unbounded : HOTTEST_GEV
+  return Math.min(maximum ?? Infinity, beginning, HOTTEST_GEV)
+}
 
 /**
  * Decay of a parent B in equilibrium, B → n_X X + …, width Γ:

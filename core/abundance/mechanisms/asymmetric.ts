@@ -26,6 +26,8 @@ function antiparticles(history: ThermalHistory, candidate: AsymmetricInput): Ann
     rate: annihilationRate(candidate),
     selfConjugate: true,
     asymmetry: candidate.asymmetry,
+    // A field that decays without a preference makes as many antiparticles as particles.
+    shareOfField: 0.5,
   })
 }
 

@@ -12,7 +12,7 @@ import { BACK_REACTION_TOLERANCES, solveWithBackReaction } from '../backReaction
 import { checked } from '../checked.ts'
 import { solveDecayingParent } from '../decayingParent.ts'
 import type { DecayedParent } from '../decayingParent.ts'
-import { FREEZE_IN_RULES, solveFreezeIn } from '../freezeIn.ts'
+import { FREEZE_IN_RULES, addField, fieldSource, solveFreezeIn } from '../freezeIn.ts'
 import type { FreezeInSource } from '../freezeIn.ts'
 import { decaySource } from '../freezeInSources.ts'
 import type { Effort } from '../freezeOutEffort.ts'
@@ -57,9 +57,15 @@ function parentState(
     species: [{ massGeV, degreesOfFreedom, statistics }],
     rate: annihilationRate({ massGeV, degreesOfFreedom, selfConjugate, annihilation }),
     selfConjugate,
+    shareOfField: 0,
   })
 }
 
+/** What a decaying field makes beside the parent; null when none does. */
+const besideParent = (history: ThermalHistory, source: FreezeInSource): FreezeInSource | null =>
+  history.expansion.producesUntil === null ? null : fieldSource(source.scaleGeV, source.hottestGeV)
+
+/** The parent through its freeze-out and decay. */
 function decayed(candidate: FreezeInDecayInput, state: AnnihilatingState, effort: Effort): DecayedParent {
   const result = solveDecayingParent(state, widthOf(candidate), candidate.perDecay, effort)
   if (result) return result
@@ -83,6 +89,8 @@ function throughFreezeOut(
     (found) => found.yieldToday,
     (i) => history.tableError + LEFT_OF_DECAY_TOLERANCE * DECAY_EFFORTS[i]!.tolerance,
   )
+  const field = besideParent(history, source)
+  const fromField = field === null ? { value: 0, error: 0 } : checkedFreezeIn(history, field)
   const stable = checkedFreezeOut(history, state, {
     x: startX(history, candidate.parent),
     initialAbundance: 'equilibrium',
@@ -92,8 +100,8 @@ function throughFreezeOut(
   if (stable.freezeOutX !== null) history.at(state.lnMass - Math.log(stable.freezeOutX), point)
   const widthOverHubble = stable.freezeOutX === null ? undefined : width / point.hubble
   const common = freezeInResult(history, candidate, source, {
-    value: result.value.yieldToday,
-    error: result.error,
+    value: result.value.yieldToday + fromField.value,
+    error: Math.max(result.error, fromField.error),
   })
   return {
     ...common,
@@ -159,7 +167,7 @@ export const freezeInDecay: Mechanism<FreezeInDecayInput> = {
     const samples = emptySamples(lnX)
     const source = sourceOf(history, candidate)
     const annihilation = followed(candidate)
-    if (annihilation)
+    if (annihilation) {
       solveDecayingParent(
         parentState(history, candidate, annihilation),
         widthOf(candidate),
@@ -167,7 +175,9 @@ export const freezeInDecay: Mechanism<FreezeInDecayInput> = {
         DECAY_EFFORTS[0]!,
         samples,
       )
-    else if (candidate.backReaction)
+      const field = besideParent(history, source)
+      if (field !== null) addField(history, field, samples)
+    } else if (candidate.backReaction)
       solveWithBackReaction(
         history,
         source,
