@@ -1,7 +1,7 @@
 import react from '@vitejs/plugin-react'
 import { defineConfig } from 'vitest/config'
 
-const CORE = ['tests/core/**/*.test.ts', 'tests/reference/**/*.test.ts']
+const CORE = ['tests/core/**/*.test.ts', 'tests/reference/**/*.test.ts', 'tests/bench/**/*.test.ts']
 const WEB = ['tests/web/**/*.test.{ts,tsx}']
 const SCRIPTS = ['tests/scripts/**/*.test.{ts,mjs}']
 const E2E = ['tests/e2e/**/*.test.ts']
