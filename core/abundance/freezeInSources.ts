@@ -3,12 +3,12 @@ import { decaySum } from '../bath/speciesTable.ts'
 import { HOTTEST_GEV } from '../history/radiation.ts'
 import type { ThermalHistory } from '../history/thermalHistory.ts'
 import { LeastRecentlyUsed } from '../numerics/leastRecentlyUsed.ts'
-import { lazyPositive } from '../numerics/interpolation/lazyPositive.ts'
 import type { FreezeInScatteringInput, FreezeInUltravioletInput } from '../wire/candidate.ts'
 import type { EquilibriumSpecies } from './equilibrium.ts'
 import type { FreezeInSource } from './freezeIn.ts'
-import { logLogTable, zeroOutside } from './rates/logLogTable.ts'
-import { constantMatrixElementRate, scaledScatteringRate } from './rates/scatteringRate.ts'
+import type { Collision } from './rates/collisionIntegral.ts'
+import { piecesOfTable, singlePower } from './rates/powerLawPieces.ts'
+import { collisionOf, constantMatrixElementRate, scatteringRate } from './rates/scatteringRate.ts'
 
 /** x = m/T where decays begin when nothing bounds the temperature; what is missing is below 1e-14. */
 const EARLIEST_X = 1e-5
@@ -48,37 +48,34 @@ export function decaySource(
 /** Where collisions begin when nothing bounds the temperature, GeV: they keep a tail ∝ m/T. */
 export const UNBOUNDED_SCATTERING_GEV = 9e15
 
+/** Error of ln γ where it is tabulated. */
 const REACTION_TOLERANCE = 1e-10
 
 type TabulatedScattering = Extract<FreezeInScatteringInput['scattering'], { incoming: unknown }>
 
-/** σ(√s) of an input, GeV⁻², and where its derivative jumps. */
-function crossSectionOf(scattering: TabulatedScattering): {
-  sigma: (rootS: number) => number
-  knots: number[]
-} {
-  if (scattering.kind === 'table') {
-    const table = logLogTable(scattering.points)
-    return { sigma: (rootS) => zeroOutside(table, rootS), knots: scattering.points.map((point) => point[0]) }
-  }
-  const { crossSectionGeVMinus2, referenceEnergyGeV, exponent } = scattering
-  return { sigma: (rootS) => crossSectionGeVMinus2 * (rootS / referenceEnergyGeV) ** exponent, knots: [] }
-}
-
 const memo = new LeastRecentlyUsed<(temperatureGeV: number) => number>(32)
 
-/** γ e^{√s_min/T}, tabulated as it is asked for, once for each distinct input among the last few dozen. */
-function scaledReactionDensity(
+/** γ, GeV⁴, tabulated as it is asked for, once for all inputs that differ in strength only. */
+function reactionDensity(
   scattering: TabulatedScattering,
-  least: number,
+  collision: Collision,
 ): (temperatureGeV: number) => number {
-  return memo.get(JSON.stringify([scattering, least]), () => {
-    const { sigma, knots } = crossSectionOf(scattering)
-    return lazyPositive(
-      (temperature) => scaledScatteringRate(temperature, sigma, scattering.incoming, least, knots),
-      REACTION_TOLERANCE,
+  const [one, two] = scattering.incoming
+  let strength = one.degreesOfFreedom * two.degreesOfFreedom
+  if (scattering.kind === 'table') {
+    const rate = memo.get(JSON.stringify([scattering.points, collision]), () =>
+      scatteringRate(piecesOfTable(scattering.points), collision, REACTION_TOLERANCE),
     )
-  })
+    return (temperature) => strength * rate(temperature)
+  }
+  const { crossSectionGeVMinus2, referenceEnergyGeV, exponent } = scattering
+  // (√s/√s_min)^k, of which the strength at √s_min is a factor.
+  const { least } = collision
+  strength *= crossSectionGeVMinus2 * (least / referenceEnergyGeV) ** exponent
+  const rate = memo.get(JSON.stringify([exponent, collision]), () =>
+    scatteringRate(singlePower(exponent, least), collision, REACTION_TOLERANCE),
+  )
+  return (temperature) => strength * rate(temperature)
 }
 
 /** Collisions 1 + 2 → X + 3; see rates/scatteringRate.ts. */
@@ -97,14 +94,12 @@ export function scatteringSource(
       breaks: [],
     }
   }
-  const { incoming } = scattering
-  const least = Math.max(incoming[0].massGeV + incoming[1].massGeV, massGeV)
-  const scaled = scaledReactionDensity(scattering, least)
+  const collision = collisionOf(scattering.incoming, massGeV)
   return {
-    scaleGeV: least,
-    reactionDensity: (temperature) => scaled(temperature) * Math.exp(-least / temperature),
+    scaleGeV: collision.least,
+    reactionDensity: reactionDensity(scattering, collision),
     hottestGeV,
-    coldestGeV: least / LATEST_X,
+    coldestGeV: collision.least / LATEST_X,
     breaks: [],
   }
 }

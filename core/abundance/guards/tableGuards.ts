@@ -3,9 +3,10 @@ import type { ThermalHistory } from '../../history/thermalHistory.ts'
 import type { AnnihilationInput } from '../../wire/annihilation.ts'
 import type { CandidateInput, FreezeInScatteringInput } from '../../wire/candidate.ts'
 import type { AbundanceResult, Guard } from '../../wire/compute.ts'
-import { crossSectionReach, crossSectionAverage } from '../rates/crossSectionAverage.ts'
-import { heldOutside, logLogTable, zeroOutside } from '../rates/logLogTable.ts'
-import { scaledScatteringRate, scatteringReach } from '../rates/scatteringRate.ts'
+import { lowestEnergy, scaledCollisionIntegral } from '../rates/collisionIntegral.ts'
+import type { Collision } from '../rates/collisionIntegral.ts'
+import { heldAtEnds, piecesOfTable } from '../rates/powerLawPieces.ts'
+import { collisionOf } from '../rates/scatteringRate.ts'
 import { COMMON_PRACTICE, raise } from './guard.ts'
 
 const CODE = 'table-extrapolated'
@@ -16,9 +17,21 @@ const LARGEST_SHARE = 0.01
 /** A share that is no finite double: nothing came from the rows. */
 const EVERYTHING = 1e300
 
-/** The guard on a table of σ(√s), by its rate as it is used and with the end values held outside the rows. */
-function missedShare(used: number, held: number, message: string): Guard[] {
-  const share = Math.min(held / used - 1, EVERYTHING)
+/** The guard on a table of σ(√s), by its rate at T, GeV, as it is used and with the end values held outside the rows. */
+function missedShare(
+  points: readonly (readonly [number, number])[],
+  temperatureGeV: number,
+  collision: Collision,
+  message: string,
+): Guard[] {
+  const used = piecesOfTable(points)
+  const held = heldAtEnds(used)
+  const gained = (lowestEnergy(used, collision) - lowestEnergy(held, collision)) / temperatureGeV
+  const ratio =
+    (scaledCollisionIntegral(temperatureGeV, held, collision) /
+      scaledCollisionIntegral(temperatureGeV, used, collision)) *
+    Math.exp(gained)
+  const share = Math.min(ratio - 1, EVERYTHING)
   return share <= LARGEST_SHARE
     ? []
     : [raise(CODE, message, share, LARGEST_SHARE, 'of the rate', COMMON_PRACTICE)]
@@ -36,14 +49,10 @@ function averagedTable(massGeV: number, { against, points }: Of<'table'>, x: num
 }
 
 function crossSectionTable(massGeV: number, { points }: Of<'cross-section'>, x: number): Guard[] {
-  const table = logLogTable(points)
-  const knots = points.map((point) => point[0])
-  const used = crossSectionAverage(x, massGeV, (rootS) => zeroOutside(table, rootS), knots)
-  const everywhere = [...crossSectionReach(x, massGeV), ...knots]
-  const held = crossSectionAverage(x, massGeV, (rootS) => heldOutside(table, rootS), everywhere)
   const message =
     'At freeze-out energies outside the rows of the cross-section table count, where it is taken as zero: with its end values held there ⟨σv⟩ would be larger.'
-  return missedShare(used, held, message)
+  const pair = { sum: 2 * massGeV, difference: 0, least: 2 * massGeV }
+  return missedShare(points, massGeV / x, pair, message)
 }
 
 /** Guards on the table of an annihilation that decides at x = m/T. */
@@ -56,24 +65,15 @@ export function annihilationTableGuards(
   return []
 }
 
-/** Guards on the table of a scattering whose production peaks at temperature T, GeV; √s ≥ `leastRootS`, GeV. */
+/** Guards on the table of a scattering whose production peaks at temperature T, GeV. */
 export function scatteringTableGuards(
-  { scattering }: FreezeInScatteringInput,
+  { scattering, massGeV }: FreezeInScatteringInput,
   temperatureGeV: number,
-  leastRootS: number,
 ): Guard[] {
   if (scattering.kind !== 'table') return []
-  const table = logLogTable(scattering.points)
-  const knots = scattering.points.map((point) => point[0])
-  const rate = (sigma: (rootS: number) => number, within: number[]): number =>
-    scaledScatteringRate(temperatureGeV, sigma, scattering.incoming, leastRootS, within)
   const message =
     'Where most is produced energies outside the rows of the cross-section table count, where it is taken as zero: with its end values held there production would be larger.'
-  return missedShare(
-    rate((rootS) => zeroOutside(table, rootS), knots),
-    rate((rootS) => heldOutside(table, rootS), [...scatteringReach(temperatureGeV, leastRootS), ...knots]),
-    message,
-  )
+  return missedShare(scattering.points, temperatureGeV, collisionOf(scattering.incoming, massGeV), message)
 }
 
 /** Guard on an uploaded bath, by the temperatures, GeV, that decide the abundance. */

@@ -24,7 +24,7 @@ export const freezeInScattering: Mechanism<FreezeInScatteringInput> = {
     const source = sourceOf(history, candidate)
     const result = checkedFreezeIn(history, source)
     const common = freezeInResult(history, candidate, source, result)
-    const guards = scatteringTableGuards(candidate, common.productionTemperatureGeV, source.scaleGeV)
+    const guards = scatteringTableGuards(candidate, common.productionTemperatureGeV)
     return { ...common, yieldFreezeIn: result.value, guards: [...common.guards, ...guards] }
   },
   yields(history, candidate, lnX) {

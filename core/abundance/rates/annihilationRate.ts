@@ -5,9 +5,10 @@ import { LeastRecentlyUsed } from '../../numerics/leastRecentlyUsed.ts'
 import type { AnnihilationInput } from '../../wire/annihilation.ts'
 import { coannihilationRate } from './coannihilation.ts'
 import { crossSectionAverage } from './crossSectionAverage.ts'
-import { heldOutside, logLogTable, zeroOutside } from './logLogTable.ts'
+import { heldOutside, logLogTable } from './logLogTable.ts'
+import { piecesOfTable } from './powerLawPieces.ts'
 import { resonanceAverage } from './resonanceAverage.ts'
-import { coulombFactor, hulthenFactor, maxwellAverage } from './sommerfeld.ts'
+import { coulombAverage, hulthenAverage } from './sommerfeld.ts'
 
 /** A thermally averaged annihilation cross-section. */
 export interface AnnihilationRate {
@@ -27,20 +28,24 @@ export interface AnnihilatingCandidate {
 }
 
 /** Error of ln⟨σv⟩ where an average is tabulated. */
-const AVERAGE_TOLERANCE = 1e-9
+const AVERAGE_TOLERANCE = 2e-10
 
 type Of<K extends AnnihilationInput['kind']> = Extract<AnnihilationInput, { kind: K }>
+
+/** Averages as functions of x, by what they depend on but their strength. */
+const averages = new LeastRecentlyUsed<(x: number) => number>(32)
 
 function resonant(candidate: AnnihilatingCandidate, resonance: Of<'resonance'>): (x: number) => number {
   const spinStates = candidate.degreesOfFreedom / (candidate.selfConjugate ? 1 : 2)
   const statisticalFactor = (2 * resonance.spin + 1) / spinStates ** 2
-  const pole = {
-    candidateGeV: candidate.massGeV,
-    massGeV: resonance.massGeV,
-    widthGeV: resonance.widthGeV,
-    strength: (candidate.selfConjugate ? 2 : 1) * statisticalFactor * resonance.branchingProduct,
-  }
-  return (x) => resonanceAverage(x, pole)
+  const strength = (candidate.selfConjugate ? 2 : 1) * statisticalFactor * resonance.branchingProduct
+  const { massGeV, widthGeV } = resonance
+  const pole = { candidateGeV: candidate.massGeV, massGeV, widthGeV }
+  const average = averages.get(`resonance ${pole.candidateGeV} ${massGeV} ${widthGeV}`, () =>
+    // Off the pole σv ∝ 1/v.
+    lazyPositive(resonanceAverage(pole), { tolerance: AVERAGE_TOLERANCE, coldPower: 0.5 }),
+  )
+  return (x) => strength * average(x)
 }
 
 function enhanced(
@@ -48,9 +53,14 @@ function enhanced(
   { sWaveCm3PerS, couplingAlpha: alpha, mediatorMassGeV }: Of<'sommerfeld'>,
 ): (x: number) => number {
   const bare = sWaveCm3PerS * GEV_MINUS2_PER_CM3_S
-  if (mediatorMassGeV === undefined) return (x) => bare * maxwellAverage(x, (v) => coulombFactor(v, alpha))
-  const epsilon = (Math.PI ** 2 * mediatorMassGeV) / (6 * alpha * massGeV)
-  return (x) => bare * maxwellAverage(x, (v) => hulthenFactor(v, alpha, epsilon))
+  const average =
+    mediatorMassGeV === undefined ? coulombAverage(alpha) : screened(massGeV, alpha, mediatorMassGeV)
+  return (x) => bare * average(x)
+}
+
+function screened(massGeV: number, alpha: number, mediatorGeV: number): (x: number) => number {
+  const epsilon = (Math.PI ** 2 * mediatorGeV) / (6 * alpha * massGeV)
+  return averages.get(`Hulthén ${alpha} ${epsilon}`, () => hulthenAverage(alpha, epsilon, AVERAGE_TOLERANCE))
 }
 
 function tabulated(massGeV: number, { against, points }: Of<'table'>): AnnihilationRate {
@@ -73,10 +83,6 @@ function coannihilating(candidate: AnnihilatingCandidate, input: Of<'coannihilat
 
 function buildRate(candidate: AnnihilatingCandidate): AnnihilationRate {
   const { annihilation, massGeV } = candidate
-  const averaged = (f: (x: number) => number): AnnihilationRate => ({
-    at: lazyPositive(f, AVERAGE_TOLERANCE),
-    breaks: [],
-  })
   switch (annihilation.kind) {
     case 'partial-waves': {
       // ⟨σv⟩ = a + 6b/x to leading order: Gondolo & Gelmini, Nucl. Phys. B 360 (1991) 145.
@@ -88,15 +94,15 @@ function buildRate(candidate: AnnihilatingCandidate): AnnihilationRate {
       const coefficient = annihilation.coefficientCm3PerS * GEV_MINUS2_PER_CM3_S
       return { at: (x) => coefficient * x ** -annihilation.exponent, breaks: [] }
     }
-    case 'cross-section': {
-      const table = logLogTable(annihilation.points)
-      const knots = annihilation.points.map((point) => point[0])
-      return averaged((x) => crossSectionAverage(x, massGeV, (rootS) => zeroOutside(table, rootS), knots))
-    }
+    case 'cross-section':
+      return {
+        at: crossSectionAverage(massGeV, piecesOfTable(annihilation.points), AVERAGE_TOLERANCE),
+        breaks: [],
+      }
     case 'resonance':
-      return averaged(resonant(candidate, annihilation))
+      return { at: resonant(candidate, annihilation), breaks: [] }
     case 'sommerfeld':
-      return averaged(enhanced(massGeV, annihilation))
+      return { at: enhanced(massGeV, annihilation), breaks: [] }
     case 'coannihilation':
       return coannihilating(candidate, annihilation)
     case 'table':
@@ -104,13 +110,11 @@ function buildRate(candidate: AnnihilatingCandidate): AnnihilationRate {
   }
 }
 
-const memo = new LeastRecentlyUsed<AnnihilationRate>(32)
+const rates = new LeastRecentlyUsed<AnnihilationRate>(32)
 
-/** The rate of a candidate; averages are tabulated once for each distinct input among the last few dozen. */
+/** The rate of a candidate; what is made of a table is made once for each distinct one among the last few dozen. */
 export function annihilationRate(candidate: AnnihilatingCandidate): AnnihilationRate {
-  const { massGeV, degreesOfFreedom, selfConjugate, annihilation } = candidate
-  if (annihilation.kind === 'partial-waves' || annihilation.kind === 'power-law') return buildRate(candidate)
-  return memo.get(JSON.stringify([massGeV, degreesOfFreedom, selfConjugate, annihilation]), () =>
-    buildRate(candidate),
-  )
+  const { massGeV, annihilation } = candidate
+  if (annihilation.kind !== 'cross-section' && annihilation.kind !== 'table') return buildRate(candidate)
+  return rates.get(JSON.stringify([massGeV, annihilation]), () => buildRate(candidate))
 }
