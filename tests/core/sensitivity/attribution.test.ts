@@ -1,66 +1,10 @@
-import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { abundance, buildHistory, computeAbundance, computeAttribution } from '#core/index'
-import { attribute } from '#core/sensitivity/attribution'
-import { shapleyValues } from '#core/sensitivity/shapley'
-import { candidateInput, historyInput } from '#core/wire/index'
-import { attributionFixture } from '../fixtures.ts'
-
-/** A game of four players by its sixteen values. */
-const game = fc.array(fc.double({ min: -5, max: 5, noNaN: true }), { minLength: 16, maxLength: 16 })
-
-describe('Shapley values', () => {
-  it('add up to the whole change (efficiency)', () => {
-    fc.assert(
-      fc.property(game, (values) => {
-        const sum = shapleyValues(4, (subset) => values[subset]!).reduce((total, part) => total + part, 0)
-        expect(Math.abs(sum - (values[15]! - values[0]!))).toBeLessThan(1e-12)
-      }),
-    )
-  })
-
-  it('give a player that never matters nothing (dummy)', () => {
-    fc.assert(
-      fc.property(game, (values) => {
-        const parts = shapleyValues(4, (subset) => values[subset & 0b0111]!)
-        expect(Math.abs(parts[3]!)).toBeLessThan(1e-13)
-      }),
-    )
-  })
-
-  it('treat interchangeable players alike, and follow a renaming (symmetry)', () => {
-    const swap = (subset: number): number => (subset & 0b1100) | ((subset & 1) << 1) | ((subset & 2) >> 1)
-    fc.assert(
-      fc.property(game, (values) => {
-        const parts = shapleyValues(4, (subset) => values[subset]!)
-        const swapped = shapleyValues(4, (subset) => values[swap(subset)]!)
-        expect(swapped[0]).toBeCloseTo(parts[1]!, 12)
-        expect(swapped[1]).toBeCloseTo(parts[0]!, 12)
-      }),
-    )
-  })
-
-  it('are the mean marginal effects over all orders', () => {
-    const values = [0, 1, 3, 7, 2, 2, 9, 20]
-    const orders = [
-      [0, 1, 2],
-      [0, 2, 1],
-      [1, 0, 2],
-      [1, 2, 0],
-      [2, 0, 1],
-      [2, 1, 0],
-    ]
-    const mean = [0, 0, 0]
-    for (const order of orders) {
-      let subset = 0
-      for (const player of order) {
-        mean[player]! += (values[subset | (1 << player)]! - values[subset]!) / orders.length
-        subset |= 1 << player
-      }
-    }
-    shapleyValues(3, (subset) => values[subset]!).forEach((part, i) => expect(part).toBeCloseTo(mean[i]!, 13))
-  })
-})
+import { attribute, splitSteps } from '#core/sensitivity/attribution'
+import { complete } from '#core/steps/steps'
+import { InputError, candidateInput, historyInput } from '#core/wire/index'
+import type { AttributeResult } from '#core/wire/index'
+import { attributionFixture, relative } from '../fixtures.ts'
 
 describe('attribution between two histories', () => {
   it('the other way round has the same parts with the other sign', () => {
@@ -112,5 +56,181 @@ describe('attribution between two histories', () => {
       expect(Math.abs(find(oneAtATime, group) - lnFactor), group).toBeLessThan(1e-7)
     const sum = Object.values(lnFactors).reduce((total, part) => total + part, 0)
     expect(Math.abs(sum - lnRatio)).toBeLessThan(1e-12)
+  })
+})
+
+describe('attribution of a real change', () => {
+  const candidate = {
+    mechanism: 'freeze-out',
+    massGeV: 100,
+    degreesOfFreedom: 2,
+    statistics: 'fermion',
+    annihilation: { kind: 'partial-waves', sWaveCm3PerS: 2.2e-26 },
+  }
+
+  it('does not depend on the order in which the groups are read', () => {
+    const { input } = attributionFixture.cases[0]!
+    const [baseline, variant] = [historyInput.parse(input.baseline), historyInput.parse(input.variant)]
+    const parsed = candidateInput.parse(input.candidate)
+    const groups = ['bath', 'expansion', 'neutrinos'] as const
+    const split = (order: readonly number[]): number[] => {
+      const { lnFactors } = complete(
+        splitSteps(order.length, (taken) => {
+          const mixed = Object.fromEntries(
+            taken.map((i) => [groups[order[i]!]!, variant[groups[order[i]!]!]]),
+          )
+          return abundance(buildHistory({ ...baseline, ...mixed }), parsed).omegaH2
+        }),
+      )
+      return order.map((_, group) => lnFactors[order.indexOf(group)]!)
+    }
+    const first = split([0, 1, 2])
+    for (const order of [
+      [1, 0, 2],
+      [2, 1, 0],
+      [1, 2, 0],
+    ])
+      split(order).forEach((part, i) => expect(Math.abs(part - first[i]!)).toBeLessThan(1e-13))
+  })
+
+  it('gives a group nothing that differs without a difference (dummy)', () => {
+    // The abundance leaves matter and Λ out of H, so h has no part in it.
+    const { parts, ratio } = computeAttribution({
+      baseline: { bath: { treatment: 'thresholds' } },
+      variant: { bath: { treatment: 'lattice-2016' }, today: { hubbleParameter: 0.73 } },
+      candidate,
+    })
+    const find = (group: string): number => parts.find((part) => part.group === group)!.lnFactor
+    expect(Math.abs(find('today'))).toBeLessThan(1e-15)
+    expect(Math.abs(find('bath') - Math.log(ratio))).toBeLessThan(1e-15)
+    expect(Math.abs(Math.log(ratio))).toBeGreaterThan(0.01)
+  })
+})
+
+describe('attribution between two candidates', () => {
+  const decay = {
+    mechanism: 'freeze-in-decay',
+    massGeV: 1e-5,
+    degreesOfFreedom: 2,
+    statistics: 'fermion',
+    parent: { massGeV: 300, degreesOfFreedom: 1, statistics: 'boson', lifetimeS: 1e-9 },
+  }
+  const ask = (change: object, more: object = {}): AttributeResult =>
+    computeAttribution({
+      baseline: {},
+      variant: {},
+      candidate: decay,
+      variantCandidate: { ...decay, ...change },
+      ...more,
+    })
+  const factors = ({ parts }: AttributeResult): Record<string, number> =>
+    Object.fromEntries(
+      parts.filter(({ lnFactor }) => lnFactor !== 0).map(({ group, factor }) => [group, factor]),
+    )
+
+  it('has the factors known in closed form: Ωh² ∝ m_X n_X/τ', () => {
+    const found = ask({ massGeV: 3e-5, perDecay: 2, parent: { ...decay.parent, lifetimeS: 4e-9 } })
+    expect(Object.keys(factors(found)).sort()).toEqual([
+      'candidate.massGeV',
+      'candidate.parent.lifetimeS',
+      'candidate.perDecay',
+    ])
+    const {
+      'candidate.massGeV': mass,
+      'candidate.parent.lifetimeS': lifetime,
+      'candidate.perDecay': perDecay,
+    } = factors(found)
+    expect(relative(mass!, 3)).toBeLessThan(1e-12)
+    expect(relative(lifetime!, 1 / 4)).toBeLessThan(1e-12)
+    expect(relative(perDecay!, 2)).toBeLessThan(1e-12)
+    expect(relative(found.ratio, 1.5)).toBeLessThan(1e-12)
+  })
+
+  it('treats fields alike that do alike (symmetry)', () => {
+    const found = factors(
+      ask({ massGeV: 2e-5, perDecay: 2 }, { variant: { bath: { treatment: 'lattice-2016' } } }),
+    )
+    expect(Object.keys(found)).toEqual(['bath', 'candidate.massGeV', 'candidate.perDecay'])
+    expect(relative(found['candidate.massGeV']!, found['candidate.perDecay']!)).toBeLessThan(1e-13)
+  })
+
+  it('adds history and candidate up to the whole, and is the elasticities of the variant', () => {
+    const found = ask(
+      { parent: { ...decay.parent, massGeV: 500 } },
+      { variant: { bath: { treatment: 'thresholds' } } },
+    )
+    expect(
+      relative(
+        found.parts.reduce((product, { factor }) => product * factor, 1),
+        found.ratio,
+      ),
+    ).toBeLessThan(1e-12)
+    expect(found.parts.map(({ group }) => group)).toEqual([
+      'bath',
+      'neutrinos',
+      'extraSpecies',
+      'expansion',
+      'maximumTemperatureGeV',
+      'today',
+      'candidate.parent.massGeV',
+    ])
+    expect(found.elasticities.find(({ path }) => path === 'candidate.parent.lifetimeS')!.value).toBeCloseTo(
+      -1,
+      8,
+    )
+    const { omegaH2 } = computeAbundance({
+      history: { bath: { treatment: 'thresholds' } },
+      candidate: { ...decay, parent: { ...decay.parent, massGeV: 500 } },
+    })
+    expect(relative(found.variantOmegaH2, omegaH2)).toBeLessThan(1e-12)
+  })
+
+  it('takes what is of another kind as a whole', () => {
+    const byWidth = { massGeV: 300, degreesOfFreedom: 1, statistics: 'boson', widthGeV: 1e-15 }
+    expect(Object.keys(factors(ask({ parent: byWidth })))).toEqual(['candidate.parent'])
+    const scattering = { kind: 'constant-matrix-element', matrixElementSquared: 1e-20 }
+    const variantCandidate = {
+      mechanism: 'freeze-in-scattering',
+      massGeV: 1e-5,
+      degreesOfFreedom: 2,
+      statistics: 'fermion',
+      scattering,
+    }
+    expect(
+      Object.keys(
+        factors(computeAttribution({ baseline: {}, variant: {}, candidate: decay, variantCandidate })),
+      ),
+    ).toEqual(['candidate'])
+  })
+
+  it('says what is wrong when a mixture is no candidate, or there are too many groups', () => {
+    const message = (input: () => unknown): string => {
+      try {
+        input()
+      } catch (error) {
+        if (error instanceof InputError) return error.message
+        throw error
+      }
+      return ''
+    }
+    expect(message(() => ask({ massGeV: 400, parent: { ...decay.parent, massGeV: 1000 } }))).toMatch(
+      /^variantCandidate: the baseline with candidate\.massGeV of the variant is no candidate.*candidate\.massGeV: allowed: at most the mass of the parent/,
+    )
+    const partner = { massGeV: 110, degreesOfFreedom: 2, statistics: 'fermion' }
+    const everything = {
+      massGeV: 2e-5,
+      degreesOfFreedom: 4,
+      statistics: 'boson',
+      perDecay: 2,
+      backReaction: true,
+      parent: { ...decay.parent, massGeV: 400, degreesOfFreedom: 2, statistics: 'fermion', lifetimeS: 2e-9 },
+    }
+    const otherHistory = {
+      bath: { treatment: 'thresholds' },
+      extraSpecies: [{ name: 'dark', ...partner, coupling: { kind: 'bath' } }],
+    }
+    expect(message(() => ask(everything, { variant: otherHistory }))).toMatch(
+      /^variantCandidate: allowed: at most 10 groups that differ; these are 11: bath, extraSpecies, candidate\.massGeV/,
+    )
   })
 })
