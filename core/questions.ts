@@ -2,7 +2,7 @@
 import { computeAbundance } from './abundance/abundance.ts'
 import { checkEvidence } from './evidence/evidence.ts'
 import { convertSteps } from './conversions/convert.ts'
-import { computeHistory } from './history/computeHistory.ts'
+import { historySteps } from './history/computeHistory.ts'
 import { solveSteps } from './inverse/solveFor.ts'
 import { attributeSteps } from './sensitivity/computeAttribution.ts'
 import { laboratorySteps } from './laboratory/laboratory.ts'
@@ -12,7 +12,7 @@ import type { Steps } from './steps/steps.ts'
 
 /** Each throws InputError or ConvergenceError on the way, and returns what the `compute…` of that name returns. */
 export const QUESTIONS = {
-  history: (input) => atOnce(() => computeHistory(input)),
+  history: historySteps,
   abundance: (input) => atOnce(() => computeAbundance(input)),
   evidence: (input) => atOnce(() => checkEvidence(input)),
   solve: solveSteps,

@@ -1,6 +1,6 @@
 /** Conversions between quantities: moments of a history by way of the temperature, and units of a particle's numbers. */
 import { buildHistory } from '../history/thermalHistory.ts'
-import { complete } from '../steps/steps.ts'
+import { complete, mapped } from '../steps/steps.ts'
 import type { Steps } from '../steps/steps.ts'
 import { convertRequest, isEpochQuantity } from '../wire/convert.ts'
 import type {
@@ -18,8 +18,8 @@ import { PARTICLE_UNITS } from './units.ts'
 
 type Row = ConvertResult['rows'][number]
 
-/** Values dealt with in one step. */
-const AT_ONCE = 20
+/** Values to a step: a few milliseconds. */
+const VALUES_TO_A_STEP = 20
 
 /** The wanted quantities of one kind. @throws InputError naming those of another */
 function ofOneKind<Q extends Quantity>(
@@ -37,16 +37,12 @@ function ofOneKind<Q extends Quantity>(
 
 /** A row for each value; faults of all values are told together. */
 function* rowsOf(values: readonly number[], rowOf: (value: number) => Row | string): Steps<Row[]> {
-  const rows: Row[] = []
-  const faults: Fault[] = []
-  for (const [i, value] of values.entries()) {
-    const row = rowOf(value)
-    if (typeof row === 'string') faults.push({ path: `from.values[${i}]`, value, message: row })
-    else rows.push(row)
-    if ((i + 1) % AT_ONCE === 0) yield { done: i + 1, of: values.length }
-  }
+  const rows = yield* mapped(values, VALUES_TO_A_STEP, rowOf)
+  const faults = rows.flatMap((row, i): Fault[] =>
+    typeof row === 'string' ? [{ path: `from.values[${i}]`, value: values[i], message: row }] : [],
+  )
   if (faults.length > 0) throw new InputError(faults)
-  return rows
+  return rows.filter((row) => typeof row !== 'string')
 }
 
 function epochRows(request: ConvertRequest, given: EpochQuantity): Steps<Row[]> {

@@ -4,8 +4,10 @@ import { HBARC_GEV_CM, HBAR_GEV_S, SOLAR_MASS_GEV } from '../constants/natural.t
 import type { HistoryRow } from '../wire/compute.ts'
 import type { BathInput } from '../wire/history.ts'
 import { ONE_TEMPERATURE_GEV } from '../wire/uploadedBath.ts'
+import { complete, mapped, part } from '../steps/steps.ts'
+import type { Steps } from '../steps/steps.ts'
 import { LATE_GEV, lateUniverse } from './lateUniverse.ts'
-import { ages } from './time.ts'
+import { agesSteps } from './time.ts'
 import { emptyExpansion, hubbleOf, setRadiation } from './expansionPoint.ts'
 import type { ExpansionPoint } from './expansionPoint.ts'
 import type { ThermalHistory } from './thermalHistory.ts'
@@ -68,13 +70,16 @@ function contributionsAt(
   )
 }
 
+/** Rows to a step: of the order of a millisecond. */
+const ROWS_TO_A_STEP = 50
+
 /** One row for each temperature, GeV, in the order given; with `contributions`, what each is made of. */
-export function historyRows(
+export function* historyRowSteps(
   history: ThermalHistory,
   temperaturesGeV: readonly number[],
   contributions = false,
-): HistoryRow[] {
-  const times = ages(history, temperaturesGeV)
+): Steps<HistoryRow[]> {
+  const times = yield* part(agesSteps(history, temperaturesGeV), 0, 1, 3)
   const late = lateUniverse(history)
   const { bath, apart } = history.radiation
   const point = emptyPoint()
@@ -83,7 +88,7 @@ export function historyRows(
   const hasSpeciesApart = history.input.extraSpecies.some((species) => species.coupling.kind !== 'bath')
   const neutrinosDecouple = history.input.neutrinos.decouplingTemperatureGeV
 
-  return temperaturesGeV.map((temperature, i) => {
+  const rowAt = (temperature: number, i: number): HistoryRow => {
     bath.evaluate(temperature, point)
     apart.evaluate(temperature, point.gS, other)
     const logSlope = point.gSSlope / point.gS
@@ -120,5 +125,10 @@ export function historyRows(
       ...(contributions ? { contributions: contributionsAt(history, temperature, point.gS) } : {}),
       ...(temperature < LATE_GEV ? { matterDensityGeV4: matter, darkEnergyDensityGeV4: darkEnergy } : {}),
     }
-  })
+  }
+  return yield* part(mapped(temperaturesGeV, ROWS_TO_A_STEP, rowAt), 1, 2, 3)
 }
+
+/** The same at once. */
+export const historyRows = (...asked: Parameters<typeof historyRowSteps>): HistoryRow[] =>
+  complete(historyRowSteps(...asked))

@@ -2,6 +2,8 @@
 import { brent } from '../numerics/roots/brent.ts'
 import { InputError } from '../wire/fault.ts'
 import { HBAR_GEV_S } from '../constants/natural.ts'
+import { mapped } from '../steps/steps.ts'
+import type { Steps } from '../steps/steps.ts'
 import { COLDEST_GEV, HOTTEST_GEV } from './radiation.ts'
 import type { ThermalHistory } from './thermalHistory.ts'
 import { LARGEST_PANEL, ageBetween, ageIntegrand, earliestAge, nextCut } from './time.ts'
@@ -57,24 +59,27 @@ function startFor(history: ThermalHistory, earliest: number, index: number): num
   return brent((lnT) => Math.log(earliestAge(history, lnT) / earliest), usual, LN_HOTTEST, 1e-14)
 }
 
+/** Temperatures to a step: of the order of a millisecond. */
+const TEMPERATURES_TO_A_STEP = 50
+
 /**
  * Temperatures, GeV, at the given ages, s, in any order.
  * @throws InputError for an age before the hottest or after the coldest temperature of the tables
  */
-export function temperaturesAtAges(history: ThermalHistory, timesS: readonly number[]): number[] {
+export function* temperatureSteps(history: ThermalHistory, timesS: readonly number[]): Steps<number[]> {
   const ages = timesS.map((time) => time / HBAR_GEV_S)
   const order = ages.map((_, i) => i).sort((i, j) => ages[i]! - ages[j]!)
   const integrand = ageIntegrand(history)
   const start = startFor(history, ages[order[0]!]!, order[0]!)
   let panel = panelBelow(integrand, start, earliestAge(history, start))
   const temperatures = new Array<number>(timesS.length).fill(0)
-  for (const i of order) {
+  yield* mapped(order, TEMPERATURES_TO_A_STEP, (i) => {
     while (panel.ageAtLow < ages[i]!) {
       if (panel.low <= LN_COLDEST)
         refuse(i, timesS[i]!, `at most ${panel.ageAtLow * HBAR_GEV_S} s, the age at ${COLDEST_GEV} GeV`)
       panel = panelBelow(integrand, panel.low, panel.ageAtLow)
     }
     temperatures[i] = Math.exp(within(integrand, panel, ages[i]!))
-  }
+  })
   return temperatures
 }

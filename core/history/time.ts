@@ -4,6 +4,8 @@
  */
 import { HBAR_GEV_S } from '../constants/natural.ts'
 import { gaussLegendre, integrateWith } from '../numerics/quadrature/gaussLegendre.ts'
+import { complete, mapped } from '../steps/steps.ts'
+import type { Steps } from '../steps/steps.ts'
 import { LATE_GEV, lateUniverse } from './lateUniverse.ts'
 import { emptyExpansion, hubbleOf } from './expansionPoint.ts'
 import type { ThermalHistory } from './thermalHistory.ts'
@@ -66,18 +68,25 @@ export function earliestAge(history: ThermalHistory, lnT: number): number {
   return 2 / ((4 + history.expansion.earlyIndex) * point.hubble)
 }
 
+/** Ages to a step: of the order of a millisecond. */
+const AGES_TO_A_STEP = 200
+
 /** Ages, s, at the given temperatures, GeV, in any order. */
-export function ages(history: ThermalHistory, temperaturesGeV: readonly number[]): number[] {
+export function* agesSteps(history: ThermalHistory, temperaturesGeV: readonly number[]): Steps<number[]> {
   const integrand = ageIntegrand(history)
   const order = temperaturesGeV.map((_, i) => i).sort((i, j) => temperaturesGeV[j]! - temperaturesGeV[i]!)
   let from = Math.log(Math.max(history.expansion.ageStartsAt, temperaturesGeV[order[0]!] ?? 0))
   let age = earliestAge(history, from)
   const result = new Array<number>(temperaturesGeV.length).fill(0)
-  for (const i of order) {
+  yield* mapped(order, AGES_TO_A_STEP, (i) => {
     const to = Math.log(temperaturesGeV[i]!)
     age += ageBetween(integrand, from, to)
     from = to
     result[i] = age * HBAR_GEV_S
-  }
+  })
   return result
 }
+
+/** The same at once. */
+export const ages = (history: ThermalHistory, temperaturesGeV: readonly number[]): number[] =>
+  complete(agesSteps(history, temperaturesGeV))

@@ -79,6 +79,20 @@ export function* part<T>(steps: Steps<T>, before: number, share: number, of: num
   }
 }
 
+/** What a function makes of each of a list, so many to a step. */
+export function* mapped<A, B>(
+  list: readonly A[],
+  toAStep: number,
+  make: (each: A, index: number) => B,
+): Steps<B[]> {
+  const made: B[] = []
+  for (const [i, each] of list.entries()) {
+    made.push(make(each, i))
+    if ((i + 1) % toAStep === 0) yield { done: i + 1, of: list.length }
+  }
+  return made
+}
+
 /** A computation of one step. */
 // eslint-disable-next-line require-yield -- nothing to tell before its only step is over
 export function* atOnce<T>(compute: () => T): Steps<T> {

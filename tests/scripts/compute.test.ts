@@ -1,5 +1,12 @@
-import { spawnSync } from 'node:child_process'
-import { computeAbundance, computeSolve } from '#core/index'
+import { spawn, spawnSync } from 'node:child_process'
+import { once } from 'node:events'
+import {
+  computeAbundance,
+  computeConversion,
+  computeLaboratory,
+  computePropagation,
+  computeSolve,
+} from '#core/index'
 import type { AttributeResult } from '#core/wire/index'
 import { expect, it } from 'vitest'
 
@@ -61,4 +68,68 @@ it('answers the inverse question and the attribution as the core does', () => {
     compute(['attribute'], JSON.stringify(change)).stdout,
   ) as AttributeResult
   expect(parts.reduce((product, part) => product * part.factor, 1)).toBeCloseTo(ratio, 10)
+})
+
+it('propagates, converts and checks measurements as the core does', () => {
+  const uncertain = {
+    ...INPUT,
+    distributions: [{ path: 'candidate.massGeV', kind: 'normal', mean: 100, standardDeviation: 10 }],
+    samples: 20,
+    seed: 5,
+  }
+  expect(JSON.parse(compute(['propagate'], JSON.stringify(uncertain)).stdout)).toEqual(
+    computePropagation(uncertain),
+  )
+  const moments = { from: { quantity: 'timeS', values: [1, 1e13] }, to: ['redshift', 'temperatureK'] }
+  expect(JSON.parse(compute(['convert'], JSON.stringify(moments)).stdout)).toEqual(computeConversion(moments))
+  const measured = {
+    history: {},
+    measured: {
+      parentMassGeV: { value: 300, minus: 10, plus: 10 },
+      lifetimeS: { value: 1e-9, minus: 2e-10, plus: 3e-10 },
+      massGeV: { value: 1e-5, minus: 1e-6, plus: 1e-6 },
+    },
+    parent: { degreesOfFreedom: 1, statistics: 'boson' },
+    samples: 20,
+  }
+  const { status, stdout } = compute(['laboratory', '--lines'], `${JSON.stringify(measured)}\n{}\n`)
+  const [result, fault] = stdout
+    .trimEnd()
+    .split('\n')
+    .map((line): unknown => JSON.parse(line))
+  expect(status).toBe(0)
+  expect(result).toEqual(JSON.parse(JSON.stringify(computeLaboratory(measured))))
+  expect(fault).toMatchObject({
+    error: { name: 'InputError', faults: [{ path: 'history' }, { path: 'measured' }, { path: 'parent' }] },
+  })
+})
+
+it('ends at once with status 130 and no result when interrupted in a long computation', async () => {
+  const long = {
+    ...INPUT,
+    distributions: [
+      { path: 'candidate.massGeV', kind: 'log-normal', median: 100, standardDeviationOfLn: 0.5 },
+    ],
+    samples: 100_000,
+  }
+  const child = spawn('npm', ['run', '--silent', 'compute', '--', 'propagate', '--lines'], {
+    stdio: ['pipe', 'pipe', 'inherit'],
+    detached: true,
+  })
+  const written: string[] = []
+  child.stdout.setEncoding('utf8').on('data', (chunk: string) => written.push(chunk))
+  // The answer to a short question says that the command is at work.
+  child.stdin.write(`${JSON.stringify({ ...long, samples: 10 })}\n`)
+  await once(child.stdout, 'data')
+  written.length = 0
+  child.stdin.write(`${JSON.stringify(long)}\n`)
+  await new Promise((resolve) => setTimeout(resolve, 300))
+  const interrupted = performance.now()
+  // A terminal sends Ctrl-C to the whole group.
+  process.kill(-child.pid!, 'SIGINT')
+  const [code] = (await once(child, 'exit')) as [number]
+  expect(code).toBe(130)
+  expect(written).toEqual([])
+  // The computation alone would take ten seconds or more.
+  expect(performance.now() - interrupted).toBeLessThan(5000)
 })
